@@ -1,0 +1,34 @@
+import { defineConfig } from 'vitest/config'
+
+const alias = { '@': import.meta.dirname }
+
+export default defineConfig({
+  resolve: { alias },
+  esbuild: { jsx: 'automatic' },
+  test: {
+    projects: [
+      { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },
+      { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'] } },
+      {
+        extends: true,
+        test: {
+          name: 'integration',
+          include: ['tests/integration/**/*.test.ts'],
+          testTimeout: 60_000,
+          hookTimeout: 120_000,
+          maxWorkers: 2,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'faults',
+          include: ['tests/faults/**/*.test.ts'],
+          testTimeout: 600_000,
+          hookTimeout: 120_000,
+          maxWorkers: 1,
+        },
+      },
+    ],
+  },
+})
