@@ -1,0 +1,21 @@
+import { createHash } from 'node:crypto'
+import { mkdirSync } from 'node:fs'
+import path from 'node:path'
+
+/** Root of the checkout, where package.json is. */
+export const root = path.resolve(import.meta.dirname, '../..')
+
+/** Folder of everything made on this machine; ignored by git. */
+export const localFolder = path.join(root, '.local')
+
+/** Twelve hex digits that tell this checkout from another on the same machine. */
+export const checkoutKey = createHash('sha256').update(root).digest('hex').slice(0, 12)
+
+/** Absolute path inside `.local`, whose folder is made if it is missing. */
+export function localPath(...parts) {
+  const target = path.join(localFolder, ...parts)
+  mkdirSync(path.dirname(target), { recursive: true })
+  return target
+}
+
+export const isRoot = process.getuid?.() === 0
