@@ -1,0 +1,98 @@
+export type Face = 'sans400' | 'sans500' | 'sans600' | 'sans700' | 'mono400'
+
+/** Advance widths per face and character, in thousandths of an em. */
+export type Metrics = Readonly<Record<Face, Readonly<Record<string, number>>>>
+
+const DIGITS = '0123456789'
+
+function advance(char: string, widths: Readonly<Record<string, number>>): number {
+  const own = DIGITS.includes(char) ? widestDigit(widths) : widths[char]
+  return own ?? widths['W'] ?? 1000
+}
+
+/** Pages set tabular figures, PNG do not: the widest digit stands for all. */
+function widestDigit(widths: Readonly<Record<string, number>>): number {
+  return Math.max(...[...DIGITS].map((digit) => widths[digit] ?? 0))
+}
+
+/**
+ * Width of a line of text in px. A character missing from the table counts as wide as a `W`, so the
+ * answer is never too small.
+ */
+export function textWidth(text: string, face: Face, sizePx: number, metrics: Metrics): number {
+  let thousandths = 0
+  for (const char of text) thousandths += advance(char, metrics[face])
+  return (thousandths * sizePx) / 1000
+}
+
+/**
+ * Breaks text into lines no wider than `maxPx`. Words longer than a line are cut. Never returns an
+ * empty array.
+ */
+export function wrapText(
+  text: string,
+  face: Face,
+  sizePx: number,
+  maxPx: number,
+  metrics: Metrics,
+): string[] {
+  const fits = (line: string) => textWidth(line, face, sizePx, metrics) <= maxPx
+  const lines: string[] = []
+  let line = ''
+  for (const word of text.split(/\s+/).filter(Boolean)) {
+    const joined = line === '' ? word : `${line} ${word}`
+    if (fits(joined)) {
+      line = joined
+      continue
+    }
+    if (line !== '') lines.push(line)
+    const pieces = cutWord(word, fits)
+    lines.push(...pieces.slice(0, -1))
+    line = pieces.at(-1) ?? ''
+  }
+  if (line !== '' || lines.length === 0) lines.push(line)
+  return lines
+}
+
+function cutWord(word: string, fits: (line: string) => boolean): string[] {
+  const pieces: string[] = []
+  let piece = ''
+  for (const char of word) {
+    if (piece !== '' && !fits(piece + char)) {
+      pieces.push(piece)
+      piece = ''
+    }
+    piece += char
+  }
+  return [...pieces, piece]
+}
+
+/** Wraps to at most `maxLines`; what does not fit ends in an ellipsis. */
+export function wrapTo(
+  text: string,
+  face: Face,
+  sizePx: number,
+  maxPx: number,
+  maxLines: number,
+  metrics: Metrics,
+): string[] {
+  const lines = wrapText(text, face, sizePx, maxPx, metrics)
+  if (lines.length <= maxLines) return lines
+  const kept = lines.slice(0, maxLines)
+  let last = kept[maxLines - 1] ?? ''
+  while (last.length > 1 && textWidth(`${last}…`, face, sizePx, metrics) > maxPx) {
+    last = last.slice(0, -1)
+  }
+  kept[maxLines - 1] = `${last.trimEnd()}…`
+  return kept
+}
+
+/** Widest of several lines, in px. */
+export function widestLine(
+  lines: readonly string[],
+  face: Face,
+  sizePx: number,
+  metrics: Metrics,
+): number {
+  return Math.max(0, ...lines.map((line) => textWidth(line, face, sizePx, metrics)))
+}
