@@ -1,0 +1,104 @@
+/** Every address of the product: pages under `routes`, JSON and files under `api`. */
+
+type Filter = Record<string, string | number | boolean | null | undefined>
+
+/** Adds the filters that have a value; `?` only when there is one. */
+export function withQuery(path: string, filter: Filter = {}): string {
+  const query = new URLSearchParams()
+  for (const [key, value] of Object.entries(filter)) {
+    if (value !== undefined && value !== null && value !== '') query.set(key, String(value))
+  }
+  const text = query.toString()
+  return text ? `${path}?${text}` : path
+}
+
+const part = encodeURIComponent
+
+export const applicationTabs = [
+  'sequence',
+  'clocks',
+  'design',
+  'exhibits',
+  'correspondence',
+  'queue',
+  'money',
+  'files',
+  'record',
+] as const
+export type ApplicationTab = (typeof applicationTabs)[number]
+
+export const routes = {
+  home: () => '/',
+  due: (filter?: Filter) => withQuery('/due', filter),
+  pipeline: (filter?: Filter) => withQuery('/pipeline', filter),
+  newApplication: (filter?: Filter) => withQuery('/pipeline/new', filter),
+  takeOver: (filter?: Filter) => withQuery('/pipeline/take-over', filter),
+  calendar: (filter?: Filter) => withQuery('/calendar', filter),
+  /** An application opens on its Sequence, which has no folder of its own. */
+  application: (id: string, tab: ApplicationTab = 'sequence', filter?: Filter) =>
+    withQuery(
+      tab === 'sequence' ? `/applications/${part(id)}` : `/applications/${part(id)}/${tab}`,
+      filter,
+    ),
+  newFact: (id: string, filter?: Filter) =>
+    withQuery(`/applications/${part(id)}/record-event`, filter),
+  calculation: (applicationId: string, no: number) =>
+    `/applications/${part(applicationId)}/design/calculations/${no}`,
+  exhibit: (applicationId: string, exhibitId: string) =>
+    `/applications/${part(applicationId)}/exhibits/${part(exhibitId)}`,
+  studyGroup: (id: string) => `/study-groups/${part(id)}`,
+  queueLists: () => '/queue-lists',
+  equipment: () => '/equipment',
+  organizations: () => '/organizations',
+  organization: (id: string) => `/organizations/${part(id)}`,
+  notices: (filter?: Filter) => withQuery('/notices', filter),
+  people: () => '/people',
+  person: (id: string) => `/people/${part(id)}`,
+  settings: () => '/settings',
+  signIn: (from?: string) => withQuery('/sign-in', { from }),
+  forgotPassword: () => '/sign-in/forgot',
+  resetPassword: (token: string) => `/reset/${part(token)}`,
+  invitation: (token: string) => `/invitation/${part(token)}`,
+} as const
+
+/** Pages that open without a session: the first segment of their address. */
+export const openSegments: readonly string[] = ['sign-in', 'reset', 'invitation']
+
+export const api = {
+  auth: () => '/api/auth',
+  health: () => '/api/health',
+  openapi: () => '/api/openapi.json',
+  applications: (filter?: Filter) => withQuery('/api/applications', filter),
+  application: (id: string) => `/api/applications/${part(id)}`,
+  facts: (applicationId: string) => `/api/applications/${part(applicationId)}/facts`,
+  milestones: (applicationId: string) => `/api/applications/${part(applicationId)}/milestones`,
+  exhibits: (applicationId: string) => `/api/applications/${part(applicationId)}/exhibits`,
+  exhibitDocument: (id: string) => `/api/exhibits/${part(id)}/document`,
+  groupFacts: (groupId: string) => `/api/study-groups/${part(groupId)}/facts`,
+  obligations: (filter?: Filter) => withQuery('/api/obligations', filter),
+  acknowledgements: () => '/api/acknowledgements',
+  assignments: () => '/api/assignments',
+  entries: (filter?: Filter) => withQuery('/api/entries', filter),
+  entry: (id: string) => `/api/entries/${part(id)}`,
+  files: (filter?: Filter) => withQuery('/api/files', filter),
+  file: (sha256: string) => `/api/files/${part(sha256)}`,
+  projects: () => '/api/projects',
+  organizations: () => '/api/organizations',
+  organization: (id: string) => `/api/organizations/${part(id)}`,
+  procedures: () => '/api/procedures',
+  calendarEvents: (filter?: Filter) => withQuery('/api/calendar', filter),
+  calendarFeed: (secret: string) => `/api/calendar/${part(secret)}.ics`,
+  notices: (filter?: Filter) => withQuery('/api/notices', filter),
+  people: () => '/api/people',
+  person: (id: string) => `/api/people/${part(id)}`,
+  me: () => '/api/me',
+  calendarAddress: () => '/api/me/calendar-address',
+  tokens: () => '/api/me/tokens',
+  countClocks: () => '/api/clocks/count',
+  plantEstimate: () => '/api/plant/estimate',
+  plantStrings: () => '/api/plant/strings',
+  screens: () => '/api/grid/screens',
+  gridSettings: () => '/api/grid/settings',
+  interconnection: () => '/api/grid/interconnection',
+  queueSnapshots: (utilityId: string) => `/api/queue-lists/${part(utilityId)}/snapshots`,
+} as const
