@@ -14,6 +14,7 @@ export default defineConfig({
         test: {
           name: 'integration',
           include: ['tests/integration/**/*.test.ts'],
+          globalSetup: ['tests/setup/global.ts'],
           testTimeout: 60_000,
           hookTimeout: 120_000,
           maxWorkers: 2,
@@ -24,6 +25,7 @@ export default defineConfig({
         test: {
           name: 'faults',
           include: ['tests/faults/**/*.test.ts'],
+          globalSetup: ['tests/setup/global.ts'],
           testTimeout: 600_000,
           hookTimeout: 120_000,
           maxWorkers: 1,
