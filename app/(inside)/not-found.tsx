@@ -1,0 +1,5 @@
+import { NotFoundText } from '@/app/not-found-text'
+
+export default function InsideNotFound() {
+  return <NotFoundText />
+}

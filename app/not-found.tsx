@@ -1,0 +1,9 @@
+import { NotFoundText } from '@/app/not-found-text'
+
+export default function NotFound() {
+  return (
+    <main className="px-4 py-8 md:px-8">
+      <NotFoundText />
+    </main>
+  )
+}
