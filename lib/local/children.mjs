@@ -15,7 +15,9 @@ export function household() {
 
   async function end(code) {
     ending ??= (async () => {
+      for (const pid of runningCommands) signalGroup(pid, 'SIGTERM')
       for (const child of children) await endChild(child)
+      for (const pid of runningCommands) signalGroup(pid, 'SIGKILL')
       for (const close of closers.toReversed()) await close().catch(complain)
     })()
     await ending
@@ -33,6 +35,7 @@ export function household() {
     isEnding: () => ending !== null,
     /** Starts a child that has to live as long as this process. */
     start(name, args, { env = {}, show = false } = {}) {
+      if (ending) throw new Stop(`${name} is not started: everything is being stopped.`)
       const child = spawnChild(name, args, env, show)
       children.push(child)
       child.process.once('exit', (code, signal) => {
@@ -66,9 +69,9 @@ export function lastLines(file, count = 20) {
   return readFileSync(file, 'utf8').trimEnd().split('\n').slice(-count).join('\n')
 }
 
-function signalGroup(child, signal) {
+function signalGroup(pid, signal) {
   try {
-    process.kill(-child.process.pid, signal)
+    process.kill(-pid, signal)
   } catch (error) {
     if (error.code !== 'ESRCH') throw error
   }
@@ -82,22 +85,27 @@ async function endChild(child) {
     else child.process.once('exit', resolve)
   })
   if (!child.isGone()) child.process.kill('SIGTERM')
-  const timer = setTimeout(() => signalGroup(child, 'SIGKILL'), 10_000)
+  const timer = setTimeout(() => signalGroup(child.process.pid, 'SIGKILL'), 10_000)
   await gone
   clearTimeout(timer)
-  signalGroup(child, 'SIGKILL')
+  signalGroup(child.process.pid, 'SIGKILL')
 }
+
+/** Process groups of the commands that `run` waits for; a signal ends them too. */
+const runningCommands = new Set()
 
 /** Runs a command to its end; a Stop with its last lines where it fails. */
 export function run(name, args, { env = {}, show = false, command = process.execPath } = {}) {
   const log = localPath('log', `${name}.log`)
   const out = show ? 'inherit' : openSync(log, 'w')
-  const options = { cwd: root, env: { ...process.env, ...env }, stdio: ['ignore', out, out] }
+  const options = { cwd: root, env: { ...process.env, ...env }, detached: true }
   return new Promise((resolve, reject) => {
-    const child = spawn(command, args, options)
+    const child = spawn(command, args, { ...options, stdio: ['ignore', out, out] })
+    runningCommands.add(child.pid)
     if (!show) closeSync(out)
     child.once('error', reject)
     child.once('exit', (code, signal) => {
+      runningCommands.delete(child.pid)
       if (code === 0) return resolve()
       const detail = show ? '' : `\n${lastLines(log)}`
       reject(new Stop(`${name} failed (${signal ?? `exit ${code}`}).${detail}`))

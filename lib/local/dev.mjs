@@ -1,53 +1,87 @@
-import { writeFileSync } from 'node:fs'
+import { existsSync, readFileSync, writeFileSync } from 'node:fs'
+import { appEnv } from './app-env.mjs'
+import { nextBin } from './build.mjs'
 import { household } from './children.mjs'
+import { ensureDemo } from './demo.mjs'
+import { welcome } from './demo-people.mjs'
+import { takeLock } from './lock.mjs'
 import { startMail } from './mail.mjs'
+import * as packages from './packages.mjs'
 import { localPath } from './paths.mjs'
+import { waitForPort, webPort } from './ports.mjs'
 import { complain, say } from './say.mjs'
-import { appSecrets } from './secrets.mjs'
-import * as services from './services.mjs'
+import { appSecrets, demoPassword } from './secrets.mjs'
+import { databaseEnv, migrate, openDatabase, recreate } from './services.mjs'
+import { addressOf, startWorkers } from './web.mjs'
 
 const house = household()
-
+const host = process.env.HOST || '127.0.0.1'
 const has = (flag) => process.argv.includes(flag)
+const envFile = () => localPath('dev.env')
 
-async function openDevDatabase(env) {
-  const database = await services.openDatabase('lineside_dev', { onEnd: house.onEnd })
-  if (has('--reset') && database.ours) await services.recreate(database)
-  await services.migrate(database)
-  await services.seedIfEmpty(database, env)
-  return database
-}
-
-function devEnv() {
-  return {
-    ...appSecrets(),
-    NEXTAUTH_URL: process.env.NEXTAUTH_URL || 'http://127.0.0.1:3100',
-    DEMO_PASSWORD: process.env.DEMO_PASSWORD || 'lineside-demo-dev',
+/** A shell that has read `.local/dev.env` still means our own database and mail. */
+function forgetOwnAddresses() {
+  if (!existsSync(envFile())) return
+  const lines = readFileSync(envFile(), 'utf8').split('\n')
+  for (const name of ['DATABASE_URL', 'DATABASE_OWNER_URL', 'SMTP_URL', 'NEXTAUTH_URL']) {
+    if (lines.includes(`${name}=${process.env[name]}`)) delete process.env[name]
   }
 }
 
-/** Database and mail for whoever starts the rest by hand; the addresses go to `.local/dev.env`. */
+async function prepare() {
+  packages.ensureNode()
+  await packages.ensureNodeModules()
+  if (!process.env.DATABASE_URL) packages.ensureDebianPackages(packages.neededToStart)
+  return openDatabase('lineside_dev', { onEnd: house.onEnd })
+}
+
+async function ready(database, env) {
+  await migrate(database)
+  return ensureDemo(database, env)
+}
+
+/** `--services`: database and mail for whoever starts the rest by hand, told in `.local/dev.env`. */
 async function servicesOnly() {
+  const database = await prepare()
   const mail = await startMail(house, { remember: true, name: 'dev-mail' })
-  const env = { ...devEnv(), SMTP_URL: mail.url, MAIL_PAGE_URL: mail.page ?? '' }
-  const database = await openDevDatabase(env)
-  const all = { ...services.databaseEnv(database), ...env }
-  const lines = Object.entries(all).map(([name, value]) => `${name}=${value}`)
-  writeFileSync(localPath('dev.env'), `${lines.join('\n')}\n`, { mode: 0o600 })
+  const env = { ...appEnv({ database, mail, address: addressOf(host, 3100) }) }
+  const lines = Object.entries({ ...env, ...databaseEnv(database) })
+  const text = lines.map(([name, value]) => `${name}=${value}\n`).join('')
+  writeFileSync(envFile(), text, { mode: 0o600 })
+  await ready(database, env)
   say(`Database and mail are up; their addresses are in .local/dev.env. Mail: ${mail.page}`)
 }
 
-/** `--migrate` or `--reset` beside running services: brings the database up to date and ends. */
+/** `--migrate` or `--reset` beside a running server: brings the database up to date and ends. */
 async function databaseOnly() {
-  await openDevDatabase(devEnv())
+  const database = await prepare()
+  if (has('--reset') && database.ours) await recreate(database)
+  await ready(database, { ...appSecrets(), DEMO_PASSWORD: demoPassword().value })
   say('The development database is up to date.')
   await house.end(0)
 }
 
+/** Pages and workers from the sources, with their output on the terminal. */
+async function develop() {
+  takeLock('dev', (pid) => `Development already runs from this checkout (process ${pid}).`)
+  const port = await webPort(host)
+  const database = await prepare()
+  const mail = await startMail(house, { remember: true, name: 'dev-mail' })
+  const env = appEnv({ database, mail, address: addressOf(host, port) })
+  const seeded = await ready(database, env)
+  const args = [nextBin, 'dev', '-H', host, '-p', String(port)]
+  const child = house.start('web', args, { env, show: true })
+  startWorkers(house, env, { show: true, prefix: 'dev-' })
+  await waitForPort(port, 'The development server', { gaveUp: child.isGone })
+  say(welcome({ address: env.NEXTAUTH_URL, password: demoPassword().where, mail, seeded }))
+}
+
 try {
+  forgetOwnAddresses()
   if (has('--services')) await servicesOnly()
   else if (has('--migrate') || has('--reset')) await databaseOnly()
+  else await develop()
 } catch (error) {
-  complain(error)
+  if (!house.isEnding()) complain(error)
   await house.end(1)
 }

@@ -1,4 +1,4 @@
-import { mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
+import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { localPath } from './paths.mjs'
@@ -58,19 +58,23 @@ export async function oneAtATime(name, work) {
   }
 }
 
-/** Notes this process as a user of a shared thing; returns a leave() that says if it was the last. */
+const usersFolder = (name) => localPath(`${name}.users`, '.')
+
+/** Process ids noted as users of a shared thing; some may have died since. */
+export function usersOf(name) {
+  const folder = usersFolder(name)
+  return existsSync(folder) ? readdirSync(folder).map(Number) : []
+}
+
+/** Notes this process as a user; the returned leave() says whether it was the last one alive. */
 export function joinUsers(name) {
-  const folder = localPath(`${name}.users`, '.')
+  const folder = usersFolder(name)
   mkdirSync(folder, { recursive: true })
-  const mine = path.join(folder, String(process.pid))
-  writeFileSync(mine, '')
+  writeFileSync(path.join(folder, String(process.pid)), '')
   return function leave() {
-    rmSync(mine, { force: true })
-    const others = readdirSync(folder).filter((pid) => {
-      if (isAlive(Number(pid))) return true
-      rmSync(path.join(folder, pid), { force: true })
-      return false
-    })
-    return others.length === 0
+    rmSync(path.join(folder, String(process.pid)), { force: true })
+    const [alive, dead] = [usersOf(name).filter(isAlive), usersOf(name).filter((p) => !isAlive(p))]
+    for (const pid of dead) rmSync(path.join(folder, String(pid)), { force: true })
+    return alive.length === 0
   }
 }

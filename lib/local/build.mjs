@@ -1,0 +1,41 @@
+import { existsSync, readdirSync, rmSync } from 'node:fs'
+import path from 'node:path'
+import { run } from './children.mjs'
+import { isAlive, joinUsers, oneAtATime, usersOf } from './lock.mjs'
+import { localFolder, root } from './paths.mjs'
+import { say } from './say.mjs'
+import { sourceHash } from './sources.mjs'
+
+export const nextBin = 'node_modules/next/dist/bin/next'
+
+const isBuilt = (name) => existsSync(path.join(localFolder, name, 'BUILD_ID'))
+
+/** Removes builds of other sources that no living process serves. */
+function dropOldBuilds(current) {
+  for (const name of readdirSync(localFolder)) {
+    if (!/^next-[0-9a-f]{16}$/.test(name) || name === current) continue
+    if (usersOf(name).some(isAlive)) continue
+    rmSync(path.join(localFolder, name), { recursive: true, force: true })
+    rmSync(path.join(localFolder, `${name}.users`), { recursive: true, force: true })
+  }
+}
+
+/**
+ * The production build of the present sources, made only where there is none: its folder carries
+ * their hash, so a running server never sees its build change.
+ * @returns the dist folder relative to the root, to be handed on as LINESIDE_DIST_DIR
+ */
+export async function ensureBuild() {
+  return oneAtATime('next-build', async () => {
+    const name = `next-${sourceHash()}`
+    const distDir = `.local/${name}`
+    joinUsers(name)
+    dropOldBuilds(name)
+    if (isBuilt(name)) return distDir
+    say('Building (about a minute) ...')
+    rmSync(path.join(root, distDir), { recursive: true, force: true })
+    const env = { LINESIDE_DIST_DIR: distDir, NODE_ENV: 'production', NEXT_TELEMETRY_DISABLED: '1' }
+    await run('build', [nextBin, 'build'], { env })
+    return distDir
+  })
+}
