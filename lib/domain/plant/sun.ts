@@ -1,0 +1,233 @@
+import { dayNumber, dayOfYear } from '@/lib/domain/plant/calendar-day'
+import { extraterrestrialNormal } from '@/lib/domain/plant/irradiance'
+import {
+  DELTA_T_SECONDS,
+  geocentricSun,
+  meanSiderealTime,
+  type GeocentricSun,
+} from '@/lib/domain/plant/sun-geocentric'
+import type { WeatherYear } from '@/lib/domain/plant/weather-year'
+
+const RAD = Math.PI / 180
+const UNIX_EPOCH_JD = 2440587.5
+/** Refraction is applied down to here: half the sun's disk plus refraction at the horizon. */
+const REFRACTION_FROM_DEG = -(0.26667 + 0.5667)
+const REFRACTION_FROM_SIN = Math.sin(REFRACTION_FROM_DEG * RAD)
+
+export interface SunSite {
+  latitudeDeg: number
+  longitudeDeg: number
+  elevationM: number
+  /** Annual mean, Pa; from the elevation where left out. */
+  pressurePa?: number
+  /** Annual mean, degrees Celsius; 12 where left out. */
+  temperatureC?: number
+}
+
+export interface SunPosition {
+  trueZenithDeg: number
+  /** With atmospheric refraction. */
+  apparentZenithDeg: number
+  /** Clockwise from north. */
+  azimuthDeg: number
+}
+
+/** Direction to the sun, with refraction: unit vector (east, north, up). */
+interface SunVector {
+  east: number
+  north: number
+  up: number
+  trueUp: number
+}
+
+/** What every instant at one site shares. */
+interface Observer {
+  longitude: number
+  sinLatitude: number
+  cosLatitude: number
+  /** Observer's distance from the axis and the equator in Earth radii. */
+  axial: number
+  polar: number
+  refractionFactor: number
+}
+
+/** Standard pressure at an elevation in m, Pa (pv-reference.md section 1). */
+export function pressureAt(elevationM: number): number {
+  return 100 * ((44331.514 - elevationM) / 11880.516) ** (1 / 0.1902632)
+}
+
+/**
+ * Position of the sun at a Julian day of Universal Time.
+ * Source: Reda & Andreas, Solar Position Algorithm, NREL/TP-560-34302 (2008), in full.
+ */
+export function sunPosition(jd: number, site: SunSite, deltaTSeconds?: number): SunPosition {
+  const sun = geocentricSun(jd, deltaTSeconds)
+  const vector: SunVector = { east: 0, north: 0, up: 0, trueUp: 0 }
+  topocentric(meanSiderealTime(jd), sun, observerOf(site), vector)
+  const azimuth = Math.atan2(vector.east, vector.north) / RAD
+  return {
+    trueZenithDeg: Math.acos(clampUnit(vector.trueUp)) / RAD,
+    apparentZenithDeg: Math.acos(clampUnit(vector.up)) / RAD,
+    azimuthDeg: azimuth < 0 ? azimuth + 360 : azimuth,
+  }
+}
+
+/** Sun at mid-hour of each row. `up` is the cosine of the apparent zenith. */
+export interface SunYear {
+  east: Float64Array
+  north: Float64Array
+  up: Float64Array
+  /** Extraterrestrial normal irradiance on the row's local calendar day, W/m2. */
+  extraterrestrial: Float64Array
+}
+
+/**
+ * Sun of a weather year at mid-hour (stamp less 30 minutes, year as printed in each row).
+ * Rows without irradiance are left 0 unless `everyHour`. The geocentric place is computed once a
+ * day and interpolated through four days, which keeps within 1e-6 degree of the full algorithm.
+ * `shiftHours` moves the instants, for the closure check.
+ */
+export function sunYear(
+  weather: WeatherYear,
+  options: { everyHour?: boolean; shiftHours?: number } = {},
+): SunYear {
+  const { meta, year, month, day, hour, ghi, dni, dhi } = weather
+  const count = hour.length
+  const up = new Float64Array(count)
+  const result: SunYear = {
+    east: new Float64Array(count),
+    north: new Float64Array(count),
+    up,
+    extraterrestrial: new Float64Array(count),
+  }
+  const observer = observerOf(meta)
+  const track = new SunTrack()
+  const vector: SunVector = { east: 0, north: 0, up: 0, trueUp: 0 }
+  const toUt = -0.5 - meta.utcOffsetHours + (options.shiftHours ?? 0)
+  let civilDay = 0
+  let normal = 0
+  for (let i = 0; i < count; i++) {
+    if (day[i] !== day[i - 1]) {
+      civilDay = dayNumber(year[i]!, month[i]!, day[i]!)
+      normal = extraterrestrialNormal(dayOfYear(year[i]!, month[i]!, day[i]!))
+    }
+    result.extraterrestrial[i] = normal
+    if (!options.everyHour && ghi[i] === 0 && dni[i] === 0 && dhi[i] === 0) continue
+    const jd = UNIX_EPOCH_JD + civilDay + (hour[i]! + toUt) / 24
+    topocentric(meanSiderealTime(jd), track.at(jd), observer, vector)
+    result.east[i] = vector.east
+    result.north[i] = vector.north
+    up[i] = vector.up
+  }
+  return result
+}
+
+/** Geocentric places day by day, with cubic interpolation between them. */
+class SunTrack {
+  private readonly days: GeocentricSun[] = []
+  private firstDay = Number.NaN
+  private readonly now: GeocentricSun = {
+    rightAscension: 0,
+    declination: 0,
+    siderealCorrection: 0,
+    radiusAu: 1,
+  }
+
+  at(jd: number): GeocentricSun {
+    const day = Math.floor(jd)
+    this.load(day)
+    const t = jd - day
+    const [a, b, c, d] = this.days as [GeocentricSun, GeocentricSun, GeocentricSun, GeocentricSun]
+    const wa = (-t * (t - 1) * (t - 2)) / 6
+    const wb = ((t + 1) * (t - 1) * (t - 2)) / 2
+    const wc = (-(t + 1) * t * (t - 2)) / 2
+    const wd = ((t + 1) * t * (t - 1)) / 6
+    const { now } = this
+    now.rightAscension =
+      wa * a.rightAscension + wb * b.rightAscension + wc * c.rightAscension + wd * d.rightAscension
+    now.declination =
+      wa * a.declination + wb * b.declination + wc * c.declination + wd * d.declination
+    now.siderealCorrection =
+      b.siderealCorrection + t * (c.siderealCorrection - b.siderealCorrection)
+    now.radiusAu = b.radiusAu + t * (c.radiusAu - b.radiusAu)
+    return now
+  }
+
+  /** Holds the four days around `day`, keeping those already computed. */
+  private load(day: number): void {
+    const first = day - 1
+    if (first === this.firstDay) return
+    const step = first - this.firstDay
+    if (step > 0 && step < 4) this.days.splice(0, step)
+    else this.days.length = 0
+    this.firstDay = first
+    while (this.days.length < 4) {
+      this.days.push(geocentricSun(first + this.days.length, DELTA_T_SECONDS))
+    }
+    for (let i = 1; i < 4; i++) this.unwrap(this.days[i - 1]!, this.days[i]!)
+  }
+
+  private unwrap(before: GeocentricSun, after: GeocentricSun): void {
+    while (after.rightAscension < before.rightAscension - Math.PI) {
+      after.rightAscension += 2 * Math.PI
+    }
+  }
+}
+
+function observerOf(site: SunSite): Observer {
+  const latitude = site.latitudeDeg * RAD
+  const u = Math.atan(0.99664719 * Math.tan(latitude))
+  const height = site.elevationM / 6378140
+  const pressurePa = site.pressurePa ?? pressureAt(site.elevationM)
+  const kelvin = 273 + (site.temperatureC ?? 12)
+  return {
+    longitude: site.longitudeDeg * RAD,
+    sinLatitude: Math.sin(latitude),
+    cosLatitude: Math.cos(latitude),
+    axial: Math.cos(u) + height * Math.cos(latitude),
+    polar: 0.99664719 * Math.sin(u) + height * Math.sin(latitude),
+    refractionFactor: ((pressurePa / 101000) * 283 * 1.02) / (kelvin * 60),
+  }
+}
+
+/**
+ * From the Earth's center to the observer, with parallax and refraction (sections 3.11 to 3.14 of
+ * NREL/TP-560-34302; the parallax in right ascension and declination written as one vector).
+ */
+function topocentric(
+  siderealTime: number,
+  sun: GeocentricSun,
+  observer: Observer,
+  out: SunVector,
+): void {
+  const hourAngle = siderealTime + sun.siderealCorrection + observer.longitude - sun.rightAscension
+  const parallax = Math.sin((8.794 / 3600 / sun.radiusAu) * RAD)
+  const cosDeclination = Math.cos(sun.declination)
+  const x = cosDeclination * Math.cos(hourAngle) - observer.axial * parallax
+  const y = cosDeclination * Math.sin(hourAngle)
+  const z = Math.sin(sun.declination) - observer.polar * parallax
+  const length = Math.sqrt(x * x + y * y + z * z)
+  const south = (x * observer.sinLatitude - z * observer.cosLatitude) / length
+  const west = y / length
+  const trueUp = (z * observer.sinLatitude + x * observer.cosLatitude) / length
+  const level = Math.sqrt(south * south + west * west)
+  const lift = refraction(trueUp, observer.refractionFactor)
+  const cosLift = Math.cos(lift)
+  const sinLift = Math.sin(lift)
+  const scale = level > 0 ? (level * cosLift - trueUp * sinLift) / level : 1
+  out.east = -west * scale
+  out.north = -south * scale
+  out.up = trueUp * cosLift + level * sinLift
+  out.trueUp = trueUp
+}
+
+/** Refraction, radians (equation 42 of NREL/TP-560-34302), 0 for a sun well below the horizon. */
+function refraction(trueUp: number, factor: number): number {
+  if (trueUp < REFRACTION_FROM_SIN) return 0
+  const elevationDeg = Math.asin(clampUnit(trueUp)) / RAD
+  return (factor / Math.tan((elevationDeg + 10.3 / (elevationDeg + 5.11)) * RAD)) * RAD
+}
+
+function clampUnit(value: number): number {
+  return value > 1 ? 1 : value < -1 ? -1 : value
+}
