@@ -5,4 +5,5 @@ export default defineConfig({
   dialect: 'postgresql',
   schema: './db/schema/*.ts',
   out: './drizzle',
+  casing: 'snake_case',
 })

@@ -24,7 +24,7 @@ export function getPool(): Pool {
 
 /** Drizzle on the process's pool. */
 export function getDb(): Db {
-  return drizzle(getPool())
+  return drizzle(getPool(), { casing: 'snake_case' })
 }
 
 /** Runs `work` in one transaction; anything it throws rolls all of it back. */

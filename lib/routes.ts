@@ -56,13 +56,13 @@ export const routes = {
   person: (id: string) => `/people/${part(id)}`,
   settings: () => '/settings',
   signIn: (from?: string) => withQuery('/sign-in', { from }),
-  forgotPassword: () => '/sign-in/forgot',
+  forgotPassword: () => '/reset',
   resetPassword: (token: string) => `/reset/${part(token)}`,
-  invitation: (token: string) => `/invitation/${part(token)}`,
+  invitation: (token: string) => `/welcome/${part(token)}`,
 } as const
 
 /** Pages that open without a session: the first segment of their address. */
-export const openSegments: readonly string[] = ['sign-in', 'reset', 'invitation']
+export const openSegments: readonly string[] = ['sign-in', 'reset', 'welcome']
 
 export const api = {
   auth: () => '/api/auth',
