@@ -4,7 +4,6 @@ const alias = { '@': import.meta.dirname }
 
 export default defineConfig({
   resolve: { alias },
-  esbuild: { jsx: 'automatic' },
   test: {
     projects: [
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },

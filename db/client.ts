@@ -16,8 +16,10 @@ export function getPool(): Pool {
   const connectionString = process.env.DATABASE_URL
   if (!connectionString) throw new Error('DATABASE_URL is not set: no database to connect to.')
   const pool = new Pool({ connectionString, max: Number(process.env.DATABASE_POOL_SIZE ?? 10) })
-  // A connection that the server closed while idle must not end the process.
-  pool.on('error', (error) => console.error('idle database connection lost:', error.message))
+  // A connection that the server closes must not end the process: idle or lent, its error is heard.
+  const lost = (error: Error) => console.error('database connection lost:', error.message)
+  pool.on('error', lost)
+  pool.on('connect', (client) => client.on('error', lost))
   held.linesidePool = pool
   return pool
 }

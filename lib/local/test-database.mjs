@@ -62,13 +62,23 @@ export async function cloneTemplate({ adminUrl, template }, label) {
 
 const keptDatabases = `
   select datname as name from pg_database
-  where datname !~ '^template' and datname <> 'postgres'
+  where datname not in ('template0', 'template1', 'postgres', $1)
     and not exists (select 1 from pg_stat_activity where pg_stat_activity.datname = pg_database.datname)`
 
-/** Drops what earlier failed runs kept, except what somebody looks at. */
-async function dropLeftovers(server) {
-  const { rows } = await withClient(server.adminUrl, (client) => client.query(keptDatabases))
+/** Drops old templates and what earlier failed runs kept, except what somebody looks at. */
+async function dropLeftovers(server, template) {
+  const { rows } = await withClient(server.adminUrl, (client) =>
+    client.query(keptDatabases, [template]),
+  )
   for (const { name } of rows) await dropDatabase(server, name)
+}
+
+const surroundings = ['DATABASE_URL', 'DATABASE_OWNER_URL', 'SMTP_URL', 'NEXTAUTH_URL']
+const moreSurroundings = ['NEXTAUTH_SECRET', 'DEMO_PASSWORD', 'FILES_DIR', 'TEST_DATABASE']
+
+/** Tests use servers and secrets of their own, whatever this shell names. */
+export function forgetSurroundings() {
+  for (const name of [...surroundings, ...moreSurroundings]) delete process.env[name]
 }
 
 /**
@@ -78,8 +88,8 @@ async function dropLeftovers(server) {
 export async function startTestDatabases({ clean = false } = {}) {
   const server = await startPostgres('test-postgres', { fast: true })
   const urlsOf = await ensureRoles(server)
-  if (clean) await dropLeftovers(server)
   const template = await ensureTemplate(server, urlsOf)
+  if (clean) await dropLeftovers(server, template)
   const access = { adminUrl: server.adminUrl, template, urls: urlsOf('DATABASE') }
   return {
     ...access,
