@@ -1,8 +1,26 @@
-import { boolean, doublePrecision, index, integer, jsonb, pgTable, primaryKey, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core'
+import {
+  boolean,
+  doublePrecision,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core'
 import { sql } from 'drizzle-orm'
 import type { Channel, FactBody, FactKind, Terms } from '@/lib/domain/clocks/facts'
 import type { DerivationLine } from '@/lib/domain/clocks/derivation'
-import type { Consequence, OwnerRole, RuleSource, StepKind, StepParty } from '@/lib/domain/clocks/procedure'
+import type {
+  Consequence,
+  OwnerRole,
+  RuleSource,
+  StepKind,
+  StepParty,
+} from '@/lib/domain/clocks/procedure'
 import type { Status } from '@/lib/domain/clocks/schedule-types'
 import { civilDate, id, instant, minorUnits, recordedAt } from '@/db/columns'
 import { organizations, procedureRevisions } from '@/db/schema/organizations'
@@ -27,14 +45,18 @@ export const projects = pgTable('projects', {
 
 export const studyGroups = pgTable('study_groups', {
   id: id(),
-  organizationId: uuid().notNull().references(() => organizations.id),
+  organizationId: uuid()
+    .notNull()
+    .references(() => organizations.id),
   name: text().notNull(),
   lastSeq: integer().notNull().default(0),
 })
 
 export const applications = pgTable('applications', {
   id: id(),
-  projectId: uuid().notNull().references(() => projects.id),
+  projectId: uuid()
+    .notNull()
+    .references(() => projects.id),
   entityId: uuid().references(() => entities.id),
   studyGroupId: uuid().references(() => studyGroups.id),
   lastSeq: integer().notNull().default(0),
@@ -45,8 +67,12 @@ export const applications = pgTable('applications', {
 export const applicationOrganizations = pgTable(
   'application_organizations',
   {
-    applicationId: uuid().notNull().references(() => applications.id),
-    organizationId: uuid().notNull().references(() => organizations.id),
+    applicationId: uuid()
+      .notNull()
+      .references(() => applications.id),
+    organizationId: uuid()
+      .notNull()
+      .references(() => organizations.id),
     role: text().$type<StepParty>().notNull(),
     desk: text(),
   },
@@ -105,6 +131,7 @@ export const obligations = pgTable(
     stage: text().notNull(),
     party: text().$type<StepParty>().notNull(),
     kind: text().$type<StepKind>().notNull(),
+    onLine: boolean().notNull(),
     ownerRole: text().$type<OwnerRole>(),
     consequence: jsonb().$type<Consequence>().notNull(),
     status: text().$type<Status>().notNull(),
@@ -127,7 +154,13 @@ export const obligations = pgTable(
     atSeq: integer().notNull(),
   },
   (table) => [
-    unique('obligations_key').on(table.subjectKind, table.subjectId, table.step, table.instance, table.obligation),
+    unique('obligations_key').on(
+      table.subjectKind,
+      table.subjectId,
+      table.step,
+      table.instance,
+      table.obligation,
+    ),
     index('obligations_open').on(table.status, table.dueOn),
     index('obligations_application').on(table.applicationId),
   ],
@@ -135,9 +168,13 @@ export const obligations = pgTable(
 
 /** One row an application: terms and revision in force, for lists. A projection. */
 export const applicationStates = pgTable('application_states', {
-  applicationId: uuid().primaryKey().references(() => applications.id),
+  applicationId: uuid()
+    .primaryKey()
+    .references(() => applications.id),
   terms: jsonb().$type<Terms>().notNull(),
-  procedureRevisionId: uuid().notNull().references(() => procedureRevisions.id),
+  procedureRevisionId: uuid()
+    .notNull()
+    .references(() => procedureRevisions.id),
   standing: text().$type<'preparing' | 'filed' | 'in_operation' | 'withdrawn'>().notNull(),
   stage: text().notNull(),
   stranded: jsonb().$type<{ factId: string; reason: string }[]>().notNull(),
@@ -148,12 +185,16 @@ export const assignments = pgTable(
   'assignments',
   {
     id: id(),
-    applicationId: uuid().notNull().references(() => applications.id),
+    applicationId: uuid()
+      .notNull()
+      .references(() => applications.id),
     /** `*` for the whole application. */
     step: text().notNull(),
     instance: integer().notNull().default(0),
     obligation: text().notNull().default(''),
-    personId: uuid().notNull().references(() => people.id),
+    personId: uuid()
+      .notNull()
+      .references(() => people.id),
     recordedAt: recordedAt(),
     recordedBy: uuid(),
   },
@@ -164,12 +205,16 @@ export const acknowledgements = pgTable(
   'acknowledgements',
   {
     id: id(),
-    applicationId: uuid().notNull().references(() => applications.id),
+    applicationId: uuid()
+      .notNull()
+      .references(() => applications.id),
     step: text().notNull(),
     instance: integer().notNull(),
     obligation: text().notNull().default(''),
     dueOn: civilDate().notNull(),
-    personId: uuid().notNull().references(() => people.id),
+    personId: uuid()
+      .notNull()
+      .references(() => people.id),
     reason: text().notNull(),
     untilOn: civilDate(),
     recordedAt: recordedAt(),
@@ -187,7 +232,9 @@ export const notices = pgTable(
     applicationId: uuid().references(() => applications.id),
     dueOn: text().notNull().default(''),
     rung: text().notNull(),
-    personId: uuid().notNull().references(() => people.id),
+    personId: uuid()
+      .notNull()
+      .references(() => people.id),
     channel: text().$type<'email'>().notNull().default('email'),
     to: text().notNull(),
     body: jsonb().$type<{ subject: string; html: string; text: string }>().notNull(),
@@ -196,14 +243,25 @@ export const notices = pgTable(
     leaseUntil: instant(),
     messageId: text().notNull(),
     acceptedAt: instant(),
+    /** Why the last attempt failed, in words; kept while it is tried again. */
     failed: text(),
+    /** Set where the address was refused for good: nothing more is tried. */
+    refusedAt: instant(),
     createdAt: recordedAt(),
     /** SHA-256 of the secret in the acknowledge link; the link opens a page that posts. */
     ackSecretHash: text().unique(),
   },
   (table) => [
-    unique('notices_key').on(table.subjectKind, table.subjectKey, table.dueOn, table.rung, table.personId, table.channel),
-    index('notices_waiting').on(table.nextAttemptAt).where(sql`accepted_at is null`),
+    unique('notices_key').on(
+      table.subjectKind,
+      table.subjectKey,
+      table.dueOn,
+      table.rung,
+      table.personId,
+      table.channel,
+    ),
+    index('notices_waiting')
+      .on(table.nextAttemptAt)
+      .where(sql`accepted_at is null and refused_at is null`),
   ],
 )
-

@@ -13,7 +13,9 @@ export const calendarRevisions = pgTable(
   'calendar_revisions',
   {
     id: id(),
-    calendarId: uuid().notNull().references(() => calendars.id),
+    calendarId: uuid()
+      .notNull()
+      .references(() => calendars.id),
     no: integer().notNull(),
     rules: jsonb().$type<CalendarRules>().notNull(),
     recordedAt: recordedAt(),
@@ -32,7 +34,9 @@ export const organizations = pgTable('organizations', {
   closesAt: text(),
   receiptRule: text().$type<'as_is' | 'next_business_day'>().notNull(),
   deemedReceivedDays: integer(),
-  calendarId: uuid().notNull().references(() => calendars.id),
+  calendarId: uuid()
+    .notNull()
+    .references(() => calendars.id),
   noticeAddress: text(),
   portal: text(),
   createdAt: recordedAt(),
@@ -40,7 +44,9 @@ export const organizations = pgTable('organizations', {
 
 export const contacts = pgTable('contacts', {
   id: id(),
-  organizationId: uuid().notNull().references(() => organizations.id),
+  organizationId: uuid()
+    .notNull()
+    .references(() => organizations.id),
   name: text().notNull(),
   desk: text(),
   email: text(),
@@ -59,7 +65,9 @@ export const procedureRevisions = pgTable(
   'procedure_revisions',
   {
     id: id(),
-    procedureId: uuid().notNull().references(() => procedures.id),
+    procedureId: uuid()
+      .notNull()
+      .references(() => procedures.id),
     no: integer().notNull(),
     body: jsonb().$type<ProcedureBody>().notNull(),
     baseRevisionId: uuid(),

@@ -1,4 +1,4 @@
-import { boolean, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import { boolean, index, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
 import type { Role } from '@/lib/domain/access'
 import { id, instant, recordedAt } from '@/db/columns'
 
@@ -17,7 +17,9 @@ export const people = pgTable('people', {
 export const personRoles = pgTable(
   'person_roles',
   {
-    personId: uuid().notNull().references(() => people.id),
+    personId: uuid()
+      .notNull()
+      .references(() => people.id),
     role: text().$type<Role>().notNull(),
   },
   (table) => [primaryKey({ columns: [table.personId, table.role] })],
@@ -27,7 +29,9 @@ export const personRoles = pgTable(
 export const oneTimeTokens = pgTable('one_time_tokens', {
   hash: text().primaryKey(),
   purpose: text().$type<'invitation' | 'reset'>().notNull(),
-  personId: uuid().notNull().references(() => people.id),
+  personId: uuid()
+    .notNull()
+    .references(() => people.id),
   expiresAt: instant().notNull(),
   usedAt: instant(),
   createdAt: recordedAt(),
@@ -36,7 +40,9 @@ export const oneTimeTokens = pgTable('one_time_tokens', {
 export const apiTokens = pgTable('api_tokens', {
   hash: text().primaryKey(),
   id: uuid().notNull().unique().defaultRandom(),
-  personId: uuid().notNull().references(() => people.id),
+  personId: uuid()
+    .notNull()
+    .references(() => people.id),
   name: text().notNull(),
   createdAt: recordedAt(),
   lastUsedAt: instant(),
@@ -51,15 +57,19 @@ export const attempts = pgTable('attempts', {
   blockedUntil: instant(),
 })
 
-export const audit = pgTable('audit', {
-  id: id(),
-  at: recordedAt(),
-  requestId: text().notNull(),
-  actorId: uuid(),
-  actorName: text().notNull(),
-  action: text().notNull(),
-  subjectKind: text().notNull(),
-  subjectId: text().notNull(),
-  before: jsonb(),
-  after: jsonb(),
-})
+export const audit = pgTable(
+  'audit',
+  {
+    id: id(),
+    at: recordedAt(),
+    requestId: text().notNull(),
+    actorId: uuid(),
+    actorName: text().notNull(),
+    action: text().notNull(),
+    subjectKind: text().notNull(),
+    subjectId: text().notNull(),
+    before: jsonb(),
+    after: jsonb(),
+  },
+  (table) => [index('audit_subject').on(table.subjectKind, table.subjectId)],
+)

@@ -6,7 +6,10 @@ import { people } from '@/db/schema/people'
 
 export const weather = pgTable('weather', {
   id: id(),
-  sha256: text().notNull().unique().references(() => files.sha256),
+  sha256: text()
+    .notNull()
+    .unique()
+    .references(() => files.sha256),
   kind: text().$type<'tmy3' | 'epw' | 'synthetic'>().notNull(),
   name: text().notNull(),
   meta: jsonb().notNull(),
@@ -17,7 +20,10 @@ export const weather = pgTable('weather', {
 
 export const designs = pgTable('designs', {
   id: id(),
-  projectId: uuid().notNull().unique().references(() => projects.id),
+  projectId: uuid()
+    .notNull()
+    .unique()
+    .references(() => projects.id),
   lastNo: integer().notNull().default(0),
 })
 
@@ -25,7 +31,9 @@ export const designRevisions = pgTable(
   'design_revisions',
   {
     id: id(),
-    designId: uuid().notNull().references(() => designs.id),
+    designId: uuid()
+      .notNull()
+      .references(() => designs.id),
     no: integer().notNull(),
     /** The plant as designed; lib/schemas/design.ts states the shape. */
     body: jsonb().notNull(),
@@ -44,11 +52,17 @@ export const calculations = pgTable(
   'calculations',
   {
     id: uuid().primaryKey(),
-    applicationId: uuid().notNull().references(() => applications.id),
+    applicationId: uuid()
+      .notNull()
+      .references(() => applications.id),
     no: integer().notNull(),
-    designRevisionId: uuid().notNull().references(() => designRevisions.id),
+    designRevisionId: uuid()
+      .notNull()
+      .references(() => designRevisions.id),
     termsFactId: uuid().references(() => facts.id),
-    weatherId: uuid().notNull().references(() => weather.id),
+    weatherId: uuid()
+      .notNull()
+      .references(() => weather.id),
     inputs: jsonb().notNull(),
     result: jsonb().notNull(),
     engineVersion: text().notNull(),
@@ -63,7 +77,9 @@ export const exhibits = pgTable(
   'exhibits',
   {
     id: id(),
-    applicationId: uuid().notNull().references(() => applications.id),
+    applicationId: uuid()
+      .notNull()
+      .references(() => applications.id),
     letter: text().notNull(),
     lastNo: integer().notNull().default(0),
   },
@@ -75,7 +91,9 @@ export const exhibitRevisions = pgTable(
   'exhibit_revisions',
   {
     id: id(),
-    exhibitId: uuid().notNull().references(() => exhibits.id),
+    exhibitId: uuid()
+      .notNull()
+      .references(() => exhibits.id),
     no: integer().notNull(),
     state: text().$type<'draft' | 'checked' | 'issued' | 'superseded'>().notNull(),
     calculationId: uuid().references(() => calculations.id),
@@ -86,7 +104,9 @@ export const exhibitRevisions = pgTable(
     note: text(),
     render: text().$type<'waiting' | 'done' | 'failed'>().notNull().default('waiting'),
     renderError: text(),
-    preparedBy: uuid().notNull().references(() => people.id),
+    preparedBy: uuid()
+      .notNull()
+      .references(() => people.id),
     preparedAt: instant().notNull(),
     checkedBy: uuid().references(() => people.id),
     checkedAt: instant(),

@@ -38,6 +38,8 @@ export interface BusinessCalendar {
   rules: CalendarRules
   /** Why the organization does not count this day; null on a business day. */
   closedBecause(on: CivilDate): string | null
+  /** The same by day number, remembered: counting asks for the same days again and again. */
+  closedOnDay(day: number): string | null
 }
 
 const weekdayNames = ['Sunday', 'Monday', 'Tuesday', 'Wednesday', 'Thursday', 'Friday', 'Saturday']
@@ -57,18 +59,23 @@ export function businessCalendar(name: string, rules: CalendarRules): BusinessCa
     years.set(year, made)
     return made
   }
-  return {
-    name,
-    rules,
-    closedBecause(on) {
-      const closure = closures.get(on)
-      if (closure !== undefined) return closure
-      const weekday = weekdayOf(on)
-      if (weekend.has(weekday)) return weekdayNames[weekday]!
-      if (removals.has(on)) return null
-      return holidaysOf(Number(on.slice(0, 4))).get(on) ?? null
-    },
+  const closedBecause = (on: CivilDate) => {
+    const closure = closures.get(on)
+    if (closure !== undefined) return closure
+    const weekday = weekdayOf(on)
+    if (weekend.has(weekday)) return weekdayNames[weekday]!
+    if (removals.has(on)) return null
+    return holidaysOf(Number(on.slice(0, 4))).get(on) ?? null
   }
+  const known = new Map<number, string | null>()
+  const closedOnDay = (day: number) => {
+    const before = known.get(day)
+    if (before !== undefined) return before
+    const reason = closedBecause(fromDayNumber(day))
+    known.set(day, reason)
+    return reason
+  }
+  return { name, rules, closedBecause, closedOnDay }
 }
 
 /**
@@ -146,11 +153,14 @@ export function easterSunday(year: number): CivilDate {
 }
 
 /** The first business day on or after the day. @throws RangeError when none lies within a year. */
-export function businessDayFrom(calendar: BusinessCalendar, on: CivilDate, step: 1 | -1): CivilDate {
+export function businessDayFrom(
+  calendar: BusinessCalendar,
+  on: CivilDate,
+  step: 1 | -1,
+): CivilDate {
   let day = dayNumber(on)
   for (let tried = 0; tried <= 366; tried += 1, day += step) {
-    const candidate = fromDayNumber(day)
-    if (calendar.closedBecause(candidate) === null) return candidate
+    if (calendar.closedOnDay(day) === null) return fromDayNumber(day)
   }
   throw new RangeError(`The calendar ${calendar.name} has no business day within a year of ${on}.`)
 }

@@ -112,7 +112,11 @@ function lastLink(fact: Fact, replacedBy: ReadonlyMap<string, Fact>): Fact {
 export function termsOf(facts: readonly Fact[]): Terms {
   const terms: Terms = {}
   for (const fact of effectiveFacts(facts)) {
-    if (fact.kind === 'changed' && fact.body.decision !== 'asked' && fact.body.decision !== 'refused')
+    if (
+      fact.kind === 'changed' &&
+      fact.body.decision !== 'asked' &&
+      fact.body.decision !== 'refused'
+    )
       Object.assign(terms, fact.body.terms)
   }
   return terms

@@ -1,12 +1,7 @@
 /** The shape of a procedure: a utility's interconnection rules as data. */
 
 export type PartyRole =
-  | 'applicant'
-  | 'operator'
-  | 'wires_owner'
-  | 'affected_system'
-  | 'load_utility'
-  | 'regulator'
+  'applicant' | 'operator' | 'wires_owner' | 'affected_system' | 'load_utility' | 'regulator'
 export type StepParty = PartyRole | 'both' | 'other'
 export type StepKind = 'normal' | 'window' | 'gate' | 'anytime' | 'recurring'
 export type Unit = 'business_day' | 'calendar_day' | 'month' | 'year'
@@ -55,6 +50,8 @@ export interface ClockRule {
   /** The due date is never after the due date or event of this step. */
   neverAfter?: StepRef
   notBefore?: StepRef
+  /** Where missing this alternative has another consequence than missing the step. */
+  onMiss?: Consequence
 }
 
 export type MoneyRule = { kind: 'fixed'; amountMinor: number }
@@ -114,8 +111,12 @@ export interface Step {
   party: StepParty
   kind: StepKind
   needs?: Expr
+  /** Needed only by some outcomes, but drawn ahead as the way a request usually goes. */
+  expected?: boolean
   /** Left out: the step is open from the start of the application. */
   start?: StartRule
+  /** Closed as overtaken once one of these steps is done, whether or not it was recorded. */
+  overtakenBy?: string[]
   clocks: ClockRule[]
   obligations?: ObligationRule[]
   outcomes: OutcomeRule[]
@@ -140,6 +141,10 @@ export interface ProcedureBody {
   stages: string[]
   steps: Step[]
   loops: Loop[]
+  /** The step that makes a draft a filed request. */
+  filedStep: string
+  /** The step that puts the facility in operation. */
+  operationStep?: string
 }
 
 /** The step of that key. @throws RangeError when the procedure has none. */

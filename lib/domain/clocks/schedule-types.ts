@@ -35,7 +35,9 @@ export interface OrganizationRules {
 }
 
 /** Who is on the application, by role; `operator` must be there. */
-export type Parties = Partial<Record<PartyRole, OrganizationRules>> & { operator: OrganizationRules }
+export type Parties = Partial<Record<PartyRole, OrganizationRules>> & {
+  operator: OrganizationRules
+}
 
 export interface ScheduledItem {
   step: string
@@ -46,6 +48,8 @@ export interface ScheduledItem {
   stage: string
   party: StepParty
   kind: StepKind
+  /** Drawn on the step line: done, running, or on the usual way ahead. */
+  onLine: boolean
   ownerRole: OwnerRole | null
   consequence: Consequence
   status: Status

@@ -1,0 +1,30 @@
+import { DateTime } from 'luxon'
+import type { CivilDate } from '@/lib/domain/clocks/civil-date'
+
+/** The civil date and local `HH:MM:SS` of an instant in a zone. */
+export function localOf(at: string, zone: string): { on: CivilDate; time: string } {
+  const local = DateTime.fromISO(at, { zone })
+  if (!local.isValid) throw new RangeError(`"${at}" in zone "${zone}" is no instant.`)
+  return { on: local.toFormat('yyyy-MM-dd'), time: local.toFormat('HH:mm:ss') }
+}
+
+/**
+ * The last instant of a due date: the closing hour, or the end of the day without one.
+ *
+ * A closing hour that a daylight-saving change skips moves forward with the clock; one that
+ * occurs twice is the first.
+ */
+export function closingInstant(on: CivilDate, closesAt: string | null, zone: string): string {
+  const day = DateTime.fromISO(on, { zone })
+  const end = closesAt
+    ? DateTime.fromISO(`${on}T${closesAt}:00`, { zone })
+    : day.plus({ days: 1 }).startOf('day')
+  if (!end.isValid)
+    throw new RangeError(`"${on}" at "${closesAt}" in zone "${zone}" is no instant.`)
+  return end.toUTC().toISO()
+}
+
+/** The instant of a local date and `HH:MM` in a zone. */
+export function instantOf(on: CivilDate, time: string, zone: string): string {
+  return closingInstant(on, time, zone)
+}
