@@ -81,3 +81,19 @@ export function jobCan(name: JobActorName, action: Action): boolean {
   const allowed: readonly Action[] = jobTable[name]
   return allowed.includes(action)
 }
+
+/** Whether a person of these roles may read an entry: internal text is for the company's own. */
+export function entryIsVisible(
+  held: readonly Role[],
+  entry: { visibility: 'internal' | 'shareable' },
+): boolean {
+  return entry.visibility === 'shareable' || held.some((role) => everyone.includes(role))
+}
+
+/** Whether a file's place is open to a person: a restricted one only to those named there. */
+export function fileIsOpen(
+  personId: string,
+  link: { restrictedTo: readonly string[] | null },
+): boolean {
+  return link.restrictedTo === null || link.restrictedTo.includes(personId)
+}
