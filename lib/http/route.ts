@@ -1,11 +1,14 @@
 import { randomUUID } from 'node:crypto'
 import type { z } from 'zod'
 import { contextOf } from '@/lib/auth/context-of'
+import type { Action } from '@/lib/domain/access'
 import { problemResponse } from '@/lib/http/problem'
-import type { Context } from '@/lib/services/context'
+import { authorize, type Context } from '@/lib/services/context'
 import { ServiceError, type FieldError } from '@/lib/services/errors'
 
 interface RouteOptions<Input, Params> {
+  /** Asked before the body is read, so that who may not is told so whatever was sent. */
+  action?: Action
   /** Body for POST, PUT, PATCH and DELETE; query string for GET. */
   input?: z.ZodType<Input>
   status?: number
@@ -25,6 +28,7 @@ export function route<Input = undefined, Params = Record<string, string>>(
     const requestId = randomUUID()
     try {
       const ctx = await contextOf(request, requestId)
+      if (options.action) authorize(ctx, options.action)
       const input = options.input ? await parse(request, options.input) : (undefined as Input)
       const answer = await options.run(ctx, input, await next.params, request)
       if (answer instanceof Response) return answer

@@ -28,11 +28,9 @@ export const typedPasswordSchema = z
   .max(passwordLimits.max, `A password has at most ${passwordLimits.max} characters.`)
 
 /** A zone of the IANA time zone database, such as America/Denver. */
-export const zoneSchema = z
-  .string({ error: 'The time zone is missing.' })
-  .refine(isZone, {
-    error: (issue) => `Found ${show(issue.input)}; a zone such as America/Denver is needed.`,
-  })
+export const zoneSchema = z.string({ error: 'The time zone is missing.' }).refine(isZone, {
+  error: (issue) => `Found ${show(issue.input)}; a zone such as America/Denver is needed.`,
+})
 
 function isZone(text: string): boolean {
   try {
@@ -139,3 +137,5 @@ export type LinkAcceptance = z.infer<typeof linkAcceptance>
 
 export const saidSchema = z.object({ message: z.string() })
 export const acceptedSchema = z.object({ email: z.string() })
+
+export const credentialsInput = z.object({ email: emailSchema, password: typedPasswordSchema })

@@ -1,0 +1,7 @@
+import { describeApi } from '@/lib/http/openapi'
+
+export const dynamic = 'force-static'
+
+export function GET(): Response {
+  return Response.json(describeApi())
+}
