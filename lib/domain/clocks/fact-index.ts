@@ -1,6 +1,6 @@
 import type { CivilDate } from '@/lib/domain/clocks/civil-date'
 import { effectiveFacts, type Fact } from '@/lib/domain/clocks/facts'
-import { loopOf, type ProcedureBody } from '@/lib/domain/clocks/procedure'
+import type { ProcedureBody } from '@/lib/domain/clocks/procedure'
 
 export interface Stop {
   fromOn: CivilDate
@@ -22,7 +22,6 @@ export interface FactIndex {
   stated(step: string, instance: number): Fact | undefined
   extensions(step: string, instance: number): Fact[]
   waived(step: string, instance: number, obligation?: string): Fact | undefined
-  instances(step: string): number
   stops: Stop[]
   withdrawn: Fact | undefined
   stranded: { factId: string; reason: string }[]
@@ -48,8 +47,6 @@ export function indexFacts(body: ProcedureBody, all: readonly Fact[]): FactIndex
   const find = (kind: string, step: string, instance: number, obligation?: string) =>
     byKind.get(`${kind}:${key(step, instance, obligation)}`) ?? []
   strandRepeats(byKind, stranded)
-  const instances = countInstances(body, (step, instance) => find('happened', step, instance)[0])
-  strandBeyond(facts, known, instances, stranded)
   return {
     facts,
     happened: (step, instance) => find('happened', step, instance)[0],
@@ -59,7 +56,6 @@ export function indexFacts(body: ProcedureBody, all: readonly Fact[]): FactIndex
     stated: (step, instance) => find('stated', step, instance).at(-1),
     extensions: (step, instance) => find('extension', step, instance),
     waived: (step, instance, obligation) => find('waived', step, instance, obligation).at(-1),
-    instances: (step) => instances.get(step) ?? 1,
     stops: stopsOf(facts),
     withdrawn: withdrawalOf(facts),
     stranded,
@@ -71,34 +67,6 @@ function strandRepeats(byKind: Map<string, Fact[]>, stranded: FactIndex['strande
     if (!slot.startsWith('happened:') || !slot.endsWith('#')) continue
     for (const fact of list.slice(1))
       stranded.push({ factId: fact.id, reason: 'The same event stands recorded already.' })
-  }
-}
-
-function countInstances(
-  body: ProcedureBody,
-  happened: (step: string, instance: number) => Fact | undefined,
-): Map<string, number> {
-  const counts = new Map<string, number>()
-  for (const loop of body.loops) {
-    let n = 1
-    while (n < (loop.max ?? 99) && happened(loop.again.step, n)?.outcome === loop.again.outcome)
-      n += 1
-    for (const step of loop.scope) counts.set(step, n)
-  }
-  return counts
-}
-
-function strandBeyond(
-  facts: readonly Fact[],
-  known: ReadonlySet<string>,
-  instances: ReadonlyMap<string, number>,
-  stranded: FactIndex['stranded'],
-): void {
-  for (const fact of facts) {
-    if (!fact.step || !known.has(fact.step)) continue
-    const most = instances.get(fact.step) ?? 1
-    if (fact.instance > most)
-      stranded.push({ factId: fact.id, reason: `There is no round ${fact.instance} of this step.` })
   }
 }
 
@@ -144,9 +112,4 @@ export function stopHolding(stops: readonly Stop[], step: string, on: CivilDate)
       on >= stop.fromOn &&
       (stop.toOn === null || on <= stop.toOn),
   )
-}
-
-/** Whether the step lies in a loop that may still bring a further round. */
-export function inLoop(body: ProcedureBody, step: string): boolean {
-  return loopOf(body, step) !== undefined
 }

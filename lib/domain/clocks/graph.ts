@@ -43,6 +43,8 @@ export interface Graph {
   parties: Parties
   terms: Terms
   node(step: string, instance: number): Node
+  /** How many rounds of the step there are; one outside loops. */
+  instances(step: string): number
 }
 
 /** Whose rules a step is counted by: the organization it names, else the operator. */
@@ -61,7 +63,7 @@ function targetInstance(
   if (ref.instance === 'previous') return instance - 1
   const loop = loopOf(graph.body, ref.step)
   const same = loop !== undefined && loop === loopOf(graph.body, from.key)
-  return ref.instance === 'latest' || !same ? graph.index.instances(ref.step) : instance
+  return ref.instance === 'latest' || !same ? graph.instances(ref.step) : instance
 }
 
 /** Whether an expression over outcomes and terms holds for this round of the step. */
@@ -115,7 +117,7 @@ function truthOf(graph: Graph, node: Node, wanted: string[] | null, sameRound: b
 /** Whether the loop of this step may still bring another round. */
 function mayComeAgain(graph: Graph, node: Node): boolean {
   const loop = loopOf(graph.body, node.step)
-  if (!loop || node.instance < graph.index.instances(node.step)) return false
+  if (!loop || node.instance < graph.instances(node.step)) return false
   if (loop.max !== undefined && node.instance >= loop.max) return false
   if (loop.again.step === node.step) return false
   const again = graph.node(loop.again.step, node.instance)
@@ -191,7 +193,7 @@ function eventOf(graph: Graph, ref: StepRef, target: Step, node: Node): Resolved
 function bookedDate(graph: Graph, target: Step): Resolved {
   const fact = graph.index.booked(target.key)
   if (!fact?.dueOn) return { state: 'open' }
-  const done = graph.index.happened(target.key, graph.index.instances(target.key)) !== undefined
+  const done = graph.index.happened(target.key, graph.instances(target.key)) !== undefined
   return {
     state: 'met',
     on: fact.dueOn,

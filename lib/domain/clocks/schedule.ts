@@ -47,8 +47,9 @@ export function schedule(body: ProcedureBody, parties: Parties, facts: readonly 
       nodes.set(key, made)
       return made
     },
+    instances: (step) => roundsOf(graph, step),
   }
-  const order = roundsInOrder(body, index)
+  const order = roundsInOrder(graph)
   const settled = order.map(({ step, instance }, position) => {
     const node = overtaken(graph, graph.node(step.key, instance), step)
     return { step, node: withdrawnNode(index, { ...node, position }) }
@@ -57,12 +58,37 @@ export function schedule(body: ProcedureBody, parties: Parties, facts: readonly 
     itemOf(node),
     ...obligationItems(graph, step, node),
   ])
+  strandBeyond(graph)
   strandUnneeded(items, index)
   return { items, terms, stranded: index.stranded, ...standingOf(body, index, items) }
 }
 
+/** A further round exists once the loop's last step closed, as needed, with its outcome. */
+function roundsOf(graph: Graph, step: string): number {
+  const loop = loopOf(graph.body, step)
+  if (!loop) return 1
+  for (let n = 1; ; n += 1) {
+    if (n >= (loop.max ?? 99) || !graph.index.happened(loop.again.step, n)) return n
+    const node = graph.node(loop.again.step, n)
+    if (node.status !== 'done' || node.outcome !== loop.again.outcome) return n
+  }
+}
+
+function strandBeyond(graph: Graph): void {
+  const { body, index } = graph
+  for (const fact of index.facts) {
+    if (!fact.step || !body.steps.some((step) => step.key === fact.step)) continue
+    if (fact.instance <= graph.instances(fact.step)) continue
+    index.stranded.push({
+      factId: fact.id,
+      reason: `As the facts stand, there is no round ${fact.instance} of this step.`,
+    })
+  }
+}
+
 /** Each round of each step in the order it is drawn; a loop's rounds follow one another. */
-function roundsInOrder(body: ProcedureBody, index: FactIndex): { step: Step; instance: number }[] {
+function roundsInOrder(graph: Graph): { step: Step; instance: number }[] {
+  const { body, index } = graph
   const rounds: { step: Step; instance: number }[] = []
   const done = new Set<string>()
   for (const step of body.steps) {
@@ -71,7 +97,7 @@ function roundsInOrder(body: ProcedureBody, index: FactIndex): { step: Step; ins
     if (!loop) rounds.push({ step, instance: 1 })
     if (!loop || done.has(loop.key)) continue
     done.add(loop.key)
-    for (let instance = 1; instance <= index.instances(step.key); instance += 1)
+    for (let instance = 1; instance <= graph.instances(step.key); instance += 1)
       for (const key of loop.scope) rounds.push({ step: stepOf(body, key), instance })
   }
   return rounds
@@ -238,7 +264,7 @@ function sourceLine(step: Step) {
 function overtaken(graph: Graph, node: Node, step: Step): Node {
   if (!step.overtakenBy || (node.status !== 'open' && node.status !== 'waiting')) return node
   const by = step.overtakenBy
-    .map((key) => graph.node(key, graph.index.instances(key)))
+    .map((key) => graph.node(key, graph.instances(key)))
     .find((later) => later.status === 'done')
   if (!by) return node
   return {
