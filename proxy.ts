@@ -5,14 +5,16 @@ const isDevelopment = process.env.NODE_ENV === 'development'
 
 /**
  * The content security policy of a page. Style attributes stay open because server-rendered
- * drawings and the calendar widget carry them; style elements need the nonce.
+ * drawings and the calendar widget carry them; style elements need the nonce, except in
+ * development, where the error overlay writes its own without one.
  */
 export function contentSecurityPolicy(nonce: string, development: boolean): string {
+  const styles = development ? `'unsafe-inline'` : `'nonce-${nonce}'`
   const directives = {
     'default-src': `'self'`,
     'script-src': `'self' 'nonce-${nonce}' 'strict-dynamic'${development ? ` 'unsafe-eval'` : ''}`,
-    'style-src': `'self' 'nonce-${nonce}'`,
-    'style-src-elem': `'self' 'nonce-${nonce}'`,
+    'style-src': `'self' ${styles}`,
+    'style-src-elem': `'self' ${styles}`,
     'style-src-attr': `'unsafe-inline'`,
     'img-src': `'self' data: blob:`,
     'font-src': `'self'`,

@@ -68,7 +68,7 @@ export function Combobox(props: ComboboxProps) {
 
   return (
     <Field {...frame} id={id}>
-      <div className="relative">
+      <div className="relative w-full">
         <input
           id={id}
           name={name}

@@ -51,7 +51,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
   if (rows.length === 0 && empty) return <>{empty}</>
   return (
     <div className="max-lg:overflow-x-auto">
-      <table role="table" className="w-full border-collapse max-sm:block">
+      <table role="table" className="w-full border-separate border-spacing-0 max-sm:block">
         <caption className="sr-only">{caption}</caption>
         <thead role="rowgroup" className="max-sm:sr-only">
           <tr role="row">
@@ -107,7 +107,7 @@ function TableRow<Row>({ row, table }: { row: Row; table: DataTableProps<Row> })
     <tr
       role="row"
       className={clsx(
-        'border-rule border-b max-sm:grid max-sm:grid-cols-[minmax(0,1fr)_auto] max-sm:gap-x-4 max-sm:gap-y-1 max-sm:py-3',
+        'border-rule max-sm:grid max-sm:grid-cols-[minmax(0,1fr)_auto] max-sm:gap-x-4 max-sm:gap-y-1 max-sm:border-b max-sm:py-3',
         href && 'hover:bg-sheet has-[a[data-row-link]]:cursor-pointer',
       )}
     >
@@ -132,14 +132,14 @@ function Cell<Row>({ column, row, index, href }: CellProps<Row>) {
     <td
       role="cell"
       className={clsx(
-        'py-2.5 pr-3 align-middle last:pr-0 max-sm:py-0 max-sm:pr-0',
+        'border-rule border-b py-2.5 pr-4 align-middle last:pr-0 max-sm:border-0 max-sm:py-0 max-sm:pr-0',
         column.align === 'end' && 'sm:text-right',
         column.mono && 'mono',
         phoneClass[phone],
         column.className,
       )}
     >
-      {phone === 'line' && <span className="cap sm:hidden">{column.header}</span>}
+      {phone === 'line' && <span className="cap font-sans sm:hidden">{column.header}</span>}
       {index === 0 && href ? (
         <Link data-row-link href={href} className="no-underline">
           {content}

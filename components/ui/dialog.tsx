@@ -1,7 +1,7 @@
 'use client'
 
 import { clsx } from 'clsx'
-import type { ReactNode } from 'react'
+import { type ReactNode, useRef } from 'react'
 import * as RadixDialog from 'radix-ui/dialog'
 
 export interface DialogProps {
@@ -30,12 +30,20 @@ export function Dialog({
   width = 'narrow',
   role = 'dialog',
 }: DialogProps) {
+  const opener = useRef<Element | null>(null)
   return (
     <RadixDialog.Root open={open} onOpenChange={onOpenChange}>
       <RadixDialog.Portal>
         <RadixDialog.Overlay className="fixed inset-0 z-40 bg-(--scrim)" />
         <RadixDialog.Content
           role={role}
+          onOpenAutoFocus={() => {
+            opener.current = document.activeElement
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault()
+            if (opener.current instanceof HTMLElement) opener.current.focus()
+          }}
           {...(!description && { 'aria-describedby': undefined })}
           className={clsx(
             'border-ink bg-film text-ink fixed z-50 flex max-h-[88dvh] flex-col border-[1.5px]',

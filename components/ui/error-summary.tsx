@@ -40,7 +40,7 @@ export function ErrorSummary({
       ref={box}
       role="alert"
       tabIndex={-1}
-      className="border-late bg-late-2 mb-4 border-l-4 px-3.5 py-2.5 text-sm"
+      className="border-late bg-late-2 my-3 border-l-4 px-3.5 py-2.5 text-sm"
     >
       <p className="text-late font-semibold">{title ?? heading(errors.length)}</p>
       <ul className="mt-1 grid gap-0.5">

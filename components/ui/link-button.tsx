@@ -8,5 +8,5 @@ interface LinkButtonProps extends ComponentProps<typeof Link> {
 
 /** A link drawn as a button: it goes somewhere, it changes nothing. */
 export function LinkButton({ look = 'plain', className, ...rest }: LinkButtonProps) {
-  return <Link {...rest} className={buttonClass(look, className)} />
+  return <Link data-screen-only {...rest} className={buttonClass(look, className)} />
 }

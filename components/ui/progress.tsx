@@ -17,9 +17,11 @@ export function Progress({ label, fraction, figure }: ProgressProps) {
     fraction === undefined ? undefined : Math.round(Math.min(1, Math.max(0, fraction)) * 100)
   return (
     <div>
-      <div className="flex justify-between gap-4 text-sm">
-        <span id={id}>{label}</span>
-        <span className="mono">
+      <div className="flex flex-wrap justify-between gap-x-4 text-sm">
+        <span id={id} className="min-w-0 break-words">
+          {label}
+        </span>
+        <span className="mono whitespace-nowrap">
           {figure ?? (percent === undefined ? 'working' : `${percent} %`)}
         </span>
       </div>

@@ -34,8 +34,11 @@ export function TextField(props: InputFieldProps) {
   return <InputField type="text" {...props} />
 }
 
-/** A quantity: typed as text so that a wheel turn changes nothing, read as decimal by the schema. */
-export function NumberField({ controlClass, ...props }: InputFieldProps) {
+/**
+ * A quantity: typed as text so that a wheel turn changes nothing, read as decimal by the schema.
+ * Quantities of one form are equally wide, so that their units stand in one column.
+ */
+export function NumberField({ controlClass = 'sm:max-w-36', ...props }: InputFieldProps) {
   return (
     <InputField
       type="text"

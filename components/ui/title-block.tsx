@@ -19,7 +19,7 @@ export function TitleBlock({ cells, label }: { cells: readonly TitleCell[]; labe
   return (
     <dl
       aria-label={label}
-      className="border-ink bg-sheet grid grid-cols-2 overflow-hidden border-[1.5px] sm:flex sm:flex-wrap"
+      className="border-ink bg-sheet grid grid-cols-2 overflow-hidden border-[1.5px] sm:flex sm:flex-wrap print:mb-4"
     >
       {cells.map((cell) => (
         <Cell key={cell.caption} cell={cell} />

@@ -78,13 +78,15 @@ function Note({ message, onClose }: { message: Shown; onClose: (id: number) => v
         Close
       </RadixToast.Close>
       {detail && (
-        <RadixToast.Description className="text-ink-2 text-sm">{detail}</RadixToast.Description>
+        <RadixToast.Description className="text-ink-2 col-span-2 text-sm">
+          {detail}
+        </RadixToast.Description>
       )}
       {action && (
         <RadixToast.Action
           altText={action.altText}
           onClick={action.onPress}
-          className="justify-self-start font-semibold underline underline-offset-2"
+          className="col-span-2 mt-1 justify-self-start font-semibold underline underline-offset-2"
         >
           {action.label}
         </RadixToast.Action>

@@ -37,7 +37,7 @@ interface AccountChoicesProps {
 export function AccountChoices({ theme, onTheme }: AccountChoicesProps) {
   return (
     <>
-      <MenuChoices label="Sheet" value={theme} options={themeOptions} onChange={onTheme} />
+      <MenuChoices label="Theme" value={theme} options={themeOptions} onChange={onTheme} />
       <MenuRule />
       <MenuItem onSelect={signOutHere}>Sign out</MenuItem>
     </>
