@@ -61,6 +61,8 @@ export function proxy(request: NextRequest): NextResponse {
   }
   const headers = new Headers(request.headers)
   headers.set('x-nonce', nonce)
+  headers.set('x-path', `${pathname}${search}`)
+  headers.set('x-path', `${pathname}${search}`)
   headers.set('content-security-policy', policy)
   return secured(NextResponse.next({ request: { headers } }), policy)
 }

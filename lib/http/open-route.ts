@@ -1,9 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import type { z } from 'zod'
-import { getDb } from '@/db/client'
-import { networkAddressOf } from '@/lib/auth/network-address'
-import { requestNow } from '@/lib/auth/now'
 import { refuseForeignOrigin } from '@/lib/auth/same-origin'
+import { visitOf } from '@/lib/auth/visit-of'
 import { problemResponse } from '@/lib/http/problem'
 import { parse } from '@/lib/http/route'
 import type { Visit } from '@/lib/services/one-time-links'
@@ -19,12 +17,7 @@ export function openRoute<Input>({ input, run }: OpenRouteOptions<Input>) {
     const requestId = randomUUID()
     try {
       refuseForeignOrigin(request)
-      const visit = {
-        db: getDb(),
-        now: requestNow(),
-        requestId,
-        network: networkAddressOf(request),
-      }
+      const visit = visitOf(request, requestId)
       return Response.json(await run(visit, await parse(request, input)))
     } catch (error) {
       return problemResponse(error, requestId)

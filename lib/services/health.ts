@@ -1,6 +1,6 @@
 import { connect } from 'node:net'
 import { sql } from 'drizzle-orm'
-import type { Db } from '@/db/client'
+import { type Db, getDb } from '@/db/client'
 import { getFileStore } from '@/lib/files/store'
 import type { Health, Standing } from '@/lib/schemas/health'
 import { log } from '@/lib/services/log'
@@ -9,8 +9,20 @@ const answerWithinMs = 2000
 /** A job that could run and was not taken for so long says that its worker is away. Minutes. */
 const jobPatienceMinutes = 5
 
-/** Which parts of the product answer now. Tells no names, versions or addresses. */
-export async function readHealth(db: Db): Promise<Health> {
+const freshMs = 2000
+let last: { at: number; answer: Promise<Health> } | undefined
+
+/**
+ * Which parts of the product answer. Tells no names, versions or addresses; asks the parts at most
+ * every two seconds, because the door is open to everybody.
+ */
+export function getHealth(): Promise<Health> {
+  if (!last || Date.now() - last.at > freshMs) last = { at: Date.now(), answer: readHealth() }
+  return last.answer
+}
+
+async function readHealth(): Promise<Health> {
+  const db = getDb()
   const [database, jobs, mail, files, records] = await Promise.all([
     standingOf('database', () => db.execute(sql`select 1`)),
     standingOf('jobs', () => checkJobs(db)),

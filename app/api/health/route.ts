@@ -1,4 +1,4 @@
-import { getHealth } from '@/lib/http/health'
+import { getHealth } from '@/lib/services/health'
 
 export const dynamic = 'force-dynamic'
 

@@ -1,7 +1,7 @@
 import NextAuth from 'next-auth'
 import type { NextRequest } from 'next/server'
-import { limitSignIn } from '@/lib/auth/limited-sign-in'
 import { authOptions } from '@/lib/auth/options'
+import { limitSignIn } from '@/lib/http/limited-sign-in'
 
 interface Next {
   params: Promise<{ nextauth: string[] }>

@@ -1,8 +1,6 @@
 import { randomUUID } from 'node:crypto'
-import { getDb } from '@/db/client'
-import { networkAddressOf } from '@/lib/auth/network-address'
-import { requestNow } from '@/lib/auth/now'
 import { sessionCookieName } from '@/lib/auth/session-token'
+import { visitOf } from '@/lib/auth/visit-of'
 import { problemResponse } from '@/lib/http/problem'
 import { ServiceError } from '@/lib/services/errors'
 import { forgiveTry, signInLimits, takeTry } from '@/lib/services/limiter'
@@ -17,16 +15,17 @@ export async function limitSignIn(
   request: Request,
   proceed: () => Promise<Response>,
 ): Promise<Response> {
-  const db = getDb()
+  const requestId = randomUUID()
   try {
+    const { db, now, network } = visitOf(request, requestId)
     const email = emailIn(request.headers.get('content-type') ?? '', await bodyOf(request))
-    const limits = signInLimits(email, networkAddressOf(request))
-    await takeTry(db, limits, requestNow())
+    const limits = signInLimits(email, network)
+    await takeTry(db, limits, now)
     const response = await proceed()
     if (startsSession(response)) await forgiveTry(db, limits)
     return response
   } catch (error) {
-    return problemResponse(error, randomUUID())
+    return problemResponse(error, requestId)
   }
 }
 
