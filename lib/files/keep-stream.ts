@@ -113,7 +113,7 @@ function assertExpected(
 
 /** @returns the refusal for a file above the limit. */
 export function tooLarge(limitBytes: number): UploadError {
-  const limit = Math.floor((limitBytes / 1024 / 1024) * 10) / 10
+  const limit = Math.floor(limitBytes / 100_000) / 10
   return new UploadError('too_large', `The file is larger than the ${limit} MB allowed here.`)
 }
 

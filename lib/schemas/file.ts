@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { uuid } from '@/lib/schemas/common'
 
 /** Largest attachment, in bytes. */
-export const attachmentLimitBytes = 50 * 1024 * 1024
+export const attachmentLimitBytes = 50_000_000
 
 export const sha256Schema = z
   .string({ error: 'The SHA-256 is missing.' })

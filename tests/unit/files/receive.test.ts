@@ -10,7 +10,7 @@ import { createFolderStore } from '@/lib/files/folder-store'
 import { receiveUpload } from '@/lib/files/receive'
 import type { FileStore } from '@/lib/files/store'
 
-const mb = 1024 * 1024
+const mb = 1_000_000
 let root: string
 let store: FileStore
 
