@@ -83,6 +83,23 @@ export const plantSchema = z.object({
 })
 export type PlantInput = z.infer<typeof plantSchema>
 
+/** `neededInverterKva`: export limit, power factor there, transformers from the POI inward. */
+export const neededKvaInput = z.object({
+  limitKw: positiveUpTo(5_000_000, 'kW'),
+  powerFactorAtPoi: numberFrom(0.8, 1),
+  acLossFraction: numberFrom(0, 0.5).optional(),
+  transformers: z.array(
+    z.object({
+      ratedKva: positiveUpTo(5_000_000, 'kVA'),
+      impedancePct: numberFrom(0.5, 25, '%'),
+      xOverR: numberFrom(1, 80),
+      noLoadKw: numberFrom(0, 10_000, 'kW').optional(),
+    }),
+  ),
+  unityVoltageAt: oneOf(['poi', 'inverter']).optional(),
+})
+export type NeededKvaInput = z.infer<typeof neededKvaInput>
+
 /** Text of a weather file, or the id of one already kept. */
 export const weatherInputSchema = z.union(
   [
@@ -139,3 +156,24 @@ function below(path: string, input: number, allowed: string) {
     message: `found ${input}, allowed ${allowed}`,
   }
 }
+
+const monthlyMeanSchema = z.object({
+  ghiKwhPerM2Day: numberFrom(0, 12, 'kWh/m2 a day'),
+  dryBulbC: numberFrom(-50, 50, 'C'),
+  windMPerS: numberFrom(0, 25, 'm/s'),
+})
+
+/** A synthetic year from twelve monthly means; `stationId` is a name of our own. */
+export const syntheticYearInput = z.object({
+  site: z.object({
+    stationId: z.string().min(1).max(40),
+    name: z.string().min(1).max(120),
+    region: z.string().max(40),
+    latitudeDeg: numberFrom(-66, 66, 'degrees north'),
+    longitudeDeg: numberFrom(-180, 180, 'degrees east'),
+    elevationM: numberFrom(-430, 6000, 'm'),
+    utcOffsetHours: numberFrom(-12, 14, 'h'),
+  }),
+  months: z.array(monthlyMeanSchema).length(12, { error: 'allowed is exactly 12 months' }),
+})
+export type SyntheticYearInput = z.infer<typeof syntheticYearInput>

@@ -4,7 +4,7 @@ export interface SeriesTransformer {
   ratedKva: number
   impedancePct: number
   xOverR: number
-  noLoadKw?: number
+  noLoadKw?: number | undefined
 }
 
 export interface NeededKvaInputs {
@@ -16,7 +16,7 @@ export interface NeededKvaInputs {
   /** From the POI toward the inverters. */
   transformers: readonly SeriesTransformer[]
   /** Where the voltage is held at 1 per unit: at the POI, or at the low side of each transformer. */
-  unityVoltageAt?: 'poi' | 'inverter'
+  unityVoltageAt?: 'poi' | 'inverter' | undefined
 }
 
 export interface NeededKva {

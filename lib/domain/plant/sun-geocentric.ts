@@ -3,7 +3,6 @@ import {
   EARTH_LATITUDE_TERMS,
   EARTH_LONGITUDE_TERMS,
   EARTH_RADIUS_TERMS,
-  type SeriesTerm,
 } from '@/lib/domain/plant/spa-terms'
 
 const RAD = Math.PI / 180
@@ -27,9 +26,9 @@ export const DELTA_T_SECONDS = 67
 export function geocentricSun(jd: number, deltaTSeconds = DELTA_T_SECONDS): GeocentricSun {
   const century = (jd + deltaTSeconds / 86400 - 2451545) / 36525
   const millennium = century / 10
-  const radiusAu = series(EARTH_RADIUS_TERMS, millennium)
-  const heliocentricLongitude = series(EARTH_LONGITUDE_TERMS, millennium)
-  const latitude = -series(EARTH_LATITUDE_TERMS, millennium)
+  const radiusAu = series(RADIUS, millennium)
+  const heliocentricLongitude = series(LONGITUDE, millennium)
+  const latitude = -series(LATITUDE, millennium)
   const nutation = nutationAt(century)
   const obliquity = meanObliquity(millennium) + nutation.obliquity
   const aberration = (-20.4898 / 3600 / radiusAu) * RAD
@@ -50,21 +49,33 @@ export function geocentricSun(jd: number, deltaTSeconds = DELTA_T_SECONDS): Geoc
   }
 }
 
-/** Mean sidereal time at Greenwich, radians, not reduced (NREL/TP-560-34302 equation 28). */
+/** Mean sidereal time at Greenwich, radians, turns not taken off (NREL/TP-560-34302 equation 28). */
 export function meanSiderealTime(jd: number): number {
   const days = jd - 2451545
   const century = days / 36525
   const degrees =
     280.46061837 + 360.98564736629 * days + century * century * (0.000387933 - century / 38710000)
-  return (degrees % 360) * RAD
+  return degrees * RAD
 }
 
-function series(terms: readonly SeriesTerm[][], millennium: number): number {
+const LONGITUDE = EARTH_LONGITUDE_TERMS.map(flat)
+const LATITUDE = EARTH_LATITUDE_TERMS.map(flat)
+const RADIUS = EARTH_RADIUS_TERMS.map(flat)
+const NUTATION = flat(NUTATION_TERMS)
+
+/** Rows of a table end to end: the sums below run over them some hundred times a year. */
+function flat(rows: readonly (readonly number[])[]): Float64Array {
+  return Float64Array.from(rows.flat())
+}
+
+function series(groups: readonly Float64Array[], millennium: number): number {
   let sum = 0
   let power = 1
-  for (const group of terms) {
+  for (const rows of groups) {
     let part = 0
-    for (const [a, b, c] of group) part += a * Math.cos(b + c * millennium)
+    for (let k = 0; k < rows.length; k += 3) {
+      part += rows[k]! * Math.cos(rows[k + 1]! + rows[k + 2]! * millennium)
+    }
     sum += part * power
     power *= millennium
   }
@@ -89,10 +100,11 @@ function nutationAt(t: number): { longitude: number; obliquity: number } {
   const x4 = (125.04452 + t * (-1934.136261 + t * (0.0020708 + t / 450000))) * RAD
   let longitude = 0
   let obliquity = 0
-  for (const [y0, y1, y2, y3, y4, a, b, c, d] of NUTATION_TERMS) {
-    const argument = y0 * x0 + y1 * x1 + y2 * x2 + y3 * x3 + y4 * x4
-    longitude += (a + b * t) * Math.sin(argument)
-    if (c !== 0) obliquity += (c + d * t) * Math.cos(argument)
+  const n = NUTATION
+  for (let k = 0; k < n.length; k += 9) {
+    const argument = n[k]! * x0 + n[k + 1]! * x1 + n[k + 2]! * x2 + n[k + 3]! * x3 + n[k + 4]! * x4
+    longitude += (n[k + 5]! + n[k + 6]! * t) * Math.sin(argument)
+    if (n[k + 7] !== 0) obliquity += (n[k + 7]! + n[k + 8]! * t) * Math.cos(argument)
   }
   return { longitude: (longitude / 36000000) * RAD, obliquity: (obliquity / 36000000) * RAD }
 }

@@ -1,11 +1,11 @@
 import { dayNumber, dayOfYear } from '@/lib/domain/plant/calendar-day'
 import { extraterrestrialNormal } from '@/lib/domain/plant/irradiance'
 import {
-  DELTA_T_SECONDS,
   geocentricSun,
   meanSiderealTime,
   type GeocentricSun,
 } from '@/lib/domain/plant/sun-geocentric'
+import { SunTrack } from '@/lib/domain/plant/sun-track'
 import type { WeatherYear } from '@/lib/domain/plant/weather-year'
 
 const RAD = Math.PI / 180
@@ -83,13 +83,12 @@ export interface SunYear {
 
 /**
  * Sun of a weather year at mid-hour (stamp less 30 minutes, year as printed in each row).
- * Rows without irradiance are left 0 unless `everyHour`. The geocentric place is computed once a
- * day and interpolated through four days, which keeps within 1e-6 degree of the full algorithm.
- * `shiftHours` moves the instants, for the closure check.
+ * Rows without irradiance are left 0 unless `everyHour`. `shiftHours` moves the instants, for the
+ * closure check; `track` shares computed places between passes.
  */
 export function sunYear(
   weather: WeatherYear,
-  options: { everyHour?: boolean; shiftHours?: number } = {},
+  options: { everyHour?: boolean; shiftHours?: number; track?: SunTrack } = {},
 ): SunYear {
   const { meta, year, month, day, hour, ghi, dni, dhi } = weather
   const count = hour.length
@@ -101,7 +100,7 @@ export function sunYear(
     extraterrestrial: new Float64Array(count),
   }
   const observer = observerOf(meta)
-  const track = new SunTrack()
+  const track = options.track ?? new SunTrack()
   const vector: SunVector = { east: 0, north: 0, up: 0, trueUp: 0 }
   const toUt = -0.5 - meta.utcOffsetHours + (options.shiftHours ?? 0)
   let civilDay = 0
@@ -120,58 +119,6 @@ export function sunYear(
     up[i] = vector.up
   }
   return result
-}
-
-/** Geocentric places day by day, with cubic interpolation between them. */
-class SunTrack {
-  private readonly days: GeocentricSun[] = []
-  private firstDay = Number.NaN
-  private readonly now: GeocentricSun = {
-    rightAscension: 0,
-    declination: 0,
-    siderealCorrection: 0,
-    radiusAu: 1,
-  }
-
-  at(jd: number): GeocentricSun {
-    const day = Math.floor(jd)
-    this.load(day)
-    const t = jd - day
-    const [a, b, c, d] = this.days as [GeocentricSun, GeocentricSun, GeocentricSun, GeocentricSun]
-    const wa = (-t * (t - 1) * (t - 2)) / 6
-    const wb = ((t + 1) * (t - 1) * (t - 2)) / 2
-    const wc = (-(t + 1) * t * (t - 2)) / 2
-    const wd = ((t + 1) * t * (t - 1)) / 6
-    const { now } = this
-    now.rightAscension =
-      wa * a.rightAscension + wb * b.rightAscension + wc * c.rightAscension + wd * d.rightAscension
-    now.declination =
-      wa * a.declination + wb * b.declination + wc * c.declination + wd * d.declination
-    now.siderealCorrection =
-      b.siderealCorrection + t * (c.siderealCorrection - b.siderealCorrection)
-    now.radiusAu = b.radiusAu + t * (c.radiusAu - b.radiusAu)
-    return now
-  }
-
-  /** Holds the four days around `day`, keeping those already computed. */
-  private load(day: number): void {
-    const first = day - 1
-    if (first === this.firstDay) return
-    const step = first - this.firstDay
-    if (step > 0 && step < 4) this.days.splice(0, step)
-    else this.days.length = 0
-    this.firstDay = first
-    while (this.days.length < 4) {
-      this.days.push(geocentricSun(first + this.days.length, DELTA_T_SECONDS))
-    }
-    for (let i = 1; i < 4; i++) this.unwrap(this.days[i - 1]!, this.days[i]!)
-  }
-
-  private unwrap(before: GeocentricSun, after: GeocentricSun): void {
-    while (after.rightAscension < before.rightAscension - Math.PI) {
-      after.rightAscension += 2 * Math.PI
-    }
-  }
 }
 
 function observerOf(site: SunSite): Observer {

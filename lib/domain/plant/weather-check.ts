@@ -1,4 +1,5 @@
 import { sunYear, type SunYear } from '@/lib/domain/plant/sun'
+import { SunTrack } from '@/lib/domain/plant/sun-track'
 import type { IssueList } from '@/lib/domain/plant/weather-rows'
 import {
   stampOf,
@@ -12,7 +13,9 @@ import {
 const CLOSURE_FROM_GHI = 50
 /** Root mean square past which the three components do not belong together, Wh/m2. */
 const CLOSURE_LIMIT = 100
-const SHIFTS = [0, -0.5, 0.5, -1, 1, -1.5, 1.5, -2, 2]
+/** Below this no shifted clock can fit better, Wh/m2. */
+const CLOSURE_SURE = 10
+const SHIFTS = [-0.5, 0.5, -1, 1, -1.5, 1.5, -2, 2]
 const DEFECT_CAP = 50
 
 /** What the reader already counted. */
@@ -64,11 +67,12 @@ export function checkWeather(
  * The right half-hour is unmistakable in a sound file (pv-reference.md section 6).
  */
 export function closureCheck(year: WeatherYear): ClosureCheck {
-  const asStamped = residual(year, 0)
+  const track = new SunTrack()
+  const asStamped = residual(year, 0, track)
   let bestShiftHours = 0
   let bestRms = asStamped.rms
-  for (const shift of SHIFTS) {
-    const { rms } = shift === 0 ? asStamped : residual(year, shift)
+  for (const shift of asStamped.rms < CLOSURE_SURE ? [] : SHIFTS) {
+    const { rms } = residual(year, shift, track)
     if (rms < bestRms - 1) {
       bestRms = rms
       bestShiftHours = shift
@@ -86,8 +90,8 @@ export function closureCheck(year: WeatherYear): ClosureCheck {
   }
 }
 
-function residual(year: WeatherYear, shiftHours: number) {
-  const sun = sunYear(year, { shiftHours })
+function residual(year: WeatherYear, shiftHours: number, track: SunTrack) {
+  const sun = sunYear(year, { shiftHours, track })
   const { ghi, dni, dhi } = year
   let squares = 0
   let hours = 0
@@ -138,8 +142,9 @@ function exchangedColumns(year: WeatherYear, rms: number): string | null {
     ['DNI and DHI', { ...year, dni: dhi, dhi: dni }],
     ['GHI and DHI', { ...year, ghi: dhi, dhi: ghi }],
   ]
+  const track = new SunTrack()
   for (const [names, trial] of trials) {
-    const tried = residual(trial, 0).rms
+    const tried = residual(trial, 0, track).rms
     if (tried < CLOSURE_LIMIT / 2 && tried < rms / 2) return `${names} exchanged`
   }
   return null
