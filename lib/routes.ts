@@ -54,18 +54,24 @@ export const routes = {
   notices: (filter?: Filter) => withQuery('/notices', filter),
   people: () => '/people',
   person: (id: string) => `/people/${part(id)}`,
-  settings: () => '/settings',
+  settings: () => '/me',
   signIn: (from?: string) => withQuery('/sign-in', { from }),
   forgotPassword: () => '/reset',
   resetPassword: (token: string) => `/reset/${part(token)}`,
   invitation: (token: string) => `/welcome/${part(token)}`,
+  /** Opened from a notice: the secret speaks for its addressee. */
+  acknowledge: (secret: string) => `/acknowledge/${part(secret)}`,
 } as const
 
 /** Pages that open without a session: the first segment of their address. */
-export const openSegments: readonly string[] = ['sign-in', 'reset', 'welcome']
+export const openSegments: readonly string[] = ['sign-in', 'reset', 'welcome', 'acknowledge']
 
 export const api = {
   auth: () => '/api/auth',
+  csrf: () => '/api/auth/csrf',
+  signIn: () => '/api/auth/callback/credentials',
+  requestLink: () => '/api/one-time-links/request',
+  acceptLink: () => '/api/one-time-links/accept',
   health: () => '/api/health',
   openapi: () => '/api/openapi.json',
   applications: (filter?: Filter) => withQuery('/api/applications', filter),
@@ -77,6 +83,7 @@ export const api = {
   groupFacts: (groupId: string) => `/api/study-groups/${part(groupId)}/facts`,
   obligations: (filter?: Filter) => withQuery('/api/obligations', filter),
   acknowledgements: () => '/api/acknowledgements',
+  acknowledgementByLink: () => '/api/acknowledgements/by-link',
   assignments: () => '/api/assignments',
   entries: (filter?: Filter) => withQuery('/api/entries', filter),
   entry: (id: string) => `/api/entries/${part(id)}`,
@@ -91,9 +98,12 @@ export const api = {
   notices: (filter?: Filter) => withQuery('/api/notices', filter),
   people: () => '/api/people',
   person: (id: string) => `/api/people/${part(id)}`,
+  personInvitation: (id: string) => `/api/people/${part(id)}/invitation`,
   me: () => '/api/me',
+  ownPassword: () => '/api/me/password',
   calendarAddress: () => '/api/me/calendar-address',
   tokens: () => '/api/me/tokens',
+  token: (id: string) => `/api/me/tokens/${part(id)}`,
   countClocks: () => '/api/clocks/count',
   plantEstimate: () => '/api/plant/estimate',
   plantStrings: () => '/api/plant/strings',

@@ -29,6 +29,14 @@ export interface QueuedNotice {
   ackSecretHash?: string
 }
 
+/**
+ * An address of ours as it stands in an e-mail. From the configuration, never from a request: a
+ * forged Host header must not write our e-mail.
+ */
+export function siteUrl(path: string): string {
+  return new URL(path, process.env.NEXTAUTH_URL ?? 'http://127.0.0.1:3000').href
+}
+
 /** Ends the Message-ID of every notice. */
 const messageIdDomain = 'notices.lineside'
 

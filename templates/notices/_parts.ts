@@ -5,10 +5,10 @@ export interface Letter {
   text: string
 }
 
-/** One paragraph, a link drawn as a button, a ruled box of captions above values, or small print. */
+/** One paragraph, a link drawn as a button or plain, a ruled box of captions above values, or small print. */
 export type LetterPart =
   | { kind: 'paragraph'; text: string }
-  | { kind: 'link'; label: string; href: string }
+  | { kind: 'link'; label: string; href: string; look?: 'button' | 'plain' }
   | { kind: 'block'; cells: readonly { caption: string; value: string }[] }
   | { kind: 'note'; text: string }
 
@@ -60,7 +60,9 @@ function htmlOf(part: LetterPart): string {
     case 'paragraph':
       return `<p style="margin: 0 0 14px; font-size: 15px; line-height: 1.5;">${escapeHtml(part.text)}</p>`
     case 'link':
-      return linkHtml(escapeHtml(part.label), escapeHtml(part.href))
+      return part.look === 'plain'
+        ? plainLinkHtml(escapeHtml(part.label), escapeHtml(part.href))
+        : linkHtml(escapeHtml(part.label), escapeHtml(part.href))
     case 'block':
       return blockHtml(part.cells)
     case 'note':
@@ -70,6 +72,10 @@ function htmlOf(part: LetterPart): string {
 
 function linkHtml(label: string, href: string): string {
   return `<table role="presentation" cellpadding="0" cellspacing="0" style="margin: 4px 0 18px;"><tr><td style="background: ${copper}; border-radius: 3px;"><a href="${href}" style="display: inline-block; padding: 11px 18px; ${face}; font-size: 15px; font-weight: 600; color: #ffffff; text-decoration: none;">${label}</a></td></tr></table>`
+}
+
+function plainLinkHtml(label: string, href: string): string {
+  return `<p style="margin: 0 0 14px; font-size: 15px; line-height: 1.5;"><a href="${href}" style="color: ${ink}; ${face};">${label}</a></p>`
 }
 
 function blockHtml(cells: readonly { caption: string; value: string }[]): string {

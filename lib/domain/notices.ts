@@ -1,0 +1,258 @@
+import type { BusinessCalendar } from '@/lib/domain/clocks/calendar'
+import { addDays, type CivilDate } from '@/lib/domain/clocks/civil-date'
+import { count } from '@/lib/domain/clocks/count'
+import type { MissEffect, OwnerRole, StepParty } from '@/lib/domain/clocks/procedure'
+import { instantOf, localOf } from '@/lib/domain/clocks/zoned'
+
+/** Notices about clocks: which rung of the ladder is due, and who hears it. Common practice, no source. */
+
+/** What the ladder reads of an open obligation. */
+export interface NoticedObligation {
+  party: StepParty
+  effect: MissEffect
+  ownerRole: OwnerRole | null
+  startOn: CivilDate | null
+  /** The day by which work has to begin, where the step has a lead time. */
+  startBy: CivilDate | null
+  dueOn: CivilDate
+  /** ISO instant at which the due date closes; null where no hour is known. */
+  dueAt: string | null
+}
+
+export interface NoticedPerson {
+  id: string
+  roles: readonly OwnerRole[]
+}
+
+/** One step of a ladder. */
+export interface Rung {
+  /** Stable name; part of the key under which a notice is sent once. */
+  key: string
+  /** ISO instant from which it is due. */
+  at: string
+  says: RungSays
+  /** Developers and executives hear it too. */
+  escalates: boolean
+}
+
+export type RungSays =
+  'start' | 'ahead' | 'today' | 'closing' | 'missed' | 'theirs_late' | 'until_over'
+
+interface LadderInput {
+  obligation: NoticedObligation
+  zone: string
+  /** Whose business days space the rungs. */
+  calendar: BusinessCalendar
+  /** Silent before this day; a reminder on it. */
+  acknowledgedUntil?: CivilDate | null
+}
+
+export interface RungsDueInput extends LadderInput {
+  now: Date
+  /** The person the obligation is assigned to. */
+  assignedId?: string | null
+  /** Everybody active. */
+  people: readonly NoticedPerson[]
+}
+
+export interface DueRung extends Rung {
+  personIds: string[]
+}
+
+/** Local hour at which a rung of a day is due. */
+const morning = '08:00'
+const closingHours = 2
+const chaseEveryBusinessDays = 5
+
+interface LadderRule {
+  /** Business days ahead of the due date; further rungs only for clocks that long, in days. */
+  ahead: { businessDays: number; clockDays?: number }[]
+  closing: boolean
+  /** From this many business days before on, developers and executives hear it too. */
+  escalatesFrom: number | null
+}
+
+const losesTheRequest: LadderRule = {
+  ahead: [
+    { businessDays: 60, clockDays: 365 },
+    { businessDays: 30, clockDays: 120 },
+    { businessDays: 10 },
+    { businessDays: 5 },
+    { businessDays: 2 },
+    { businessDays: 1 },
+  ],
+  closing: true,
+  escalatesFrom: 1,
+}
+const costs: LadderRule = {
+  ahead: [{ businessDays: 20, clockDays: 120 }, { businessDays: 5 }, { businessDays: 2 }],
+  closing: false,
+  escalatesFrom: null,
+}
+const onlyTracked: LadderRule = {
+  ahead: [{ businessDays: 2 }],
+  closing: false,
+  escalatesFrom: null,
+}
+
+const ladders: Record<MissEffect, LadderRule> = {
+  withdrawn: losesTheRequest,
+  withdrawn_on_notice: losesTheRequest,
+  cure: costs,
+  extension: costs,
+  penalty: costs,
+  duty: costs,
+  presumed: costs,
+  track: onlyTracked,
+}
+
+/** The key an obligation's notices hang on: stable while the procedure is computed anew. */
+export function obligationKey(of: {
+  subjectKind: string
+  subjectId: string
+  step: string
+  instance: number
+  obligation: string
+}): string {
+  return [of.subjectKind, of.subjectId, of.step, of.instance, of.obligation].join('/')
+}
+
+/** Whether the applicant owes it; what others owe is chased once it is late. */
+export function isOurs(party: StepParty): boolean {
+  return party === 'applicant' || party === 'both'
+}
+
+/**
+ * The rung that is due now with the people who hear it; none or one. A rung whose time passed
+ * while nothing ran gives way to the latest one.
+ */
+export function rungsDue(input: RungsDueInput): DueRung[] {
+  const { now, zone, acknowledgedUntil } = input
+  const today = localOf(now.toISOString(), zone).on
+  if (acknowledgedUntil && today < acknowledgedUntil) return []
+  const passed = ladderOf(input, today).filter((rung) => Date.parse(rung.at) <= now.getTime())
+  const rung = passed.reduce<Rung | null>((latest, one) => laterRung(latest, one), null)
+  if (!rung) return []
+  const personIds = recipientsOf(input, rung)
+  return personIds.length > 0 ? [{ ...rung, personIds }] : []
+}
+
+function laterRung(a: Rung | null, b: Rung): Rung {
+  return a && Date.parse(a.at) > Date.parse(b.at) ? a : b
+}
+
+/** The rungs that lie inside the clock's life. `today` bounds how far a late step is chased. */
+export function ladderOf(input: LadderInput, today: CivilDate): Rung[] {
+  const { obligation, zone, acknowledgedUntil } = input
+  const ladder = isOurs(obligation.party) ? ourLadder(input) : theirLadder(input, today)
+  if (!acknowledgedUntil) return ladder
+  const at = instantOf(acknowledgedUntil, morning, zone)
+  const escalates = ladder.some((rung) => rung.escalates && Date.parse(rung.at) <= Date.parse(at))
+  return [{ key: `until-${acknowledgedUntil}`, at, says: 'until_over', escalates }, ...ladder]
+}
+
+function ourLadder({ obligation, zone, calendar }: LadderInput): Rung[] {
+  const { startOn, startBy, dueOn, dueAt, effect } = obligation
+  const rule = ladders[effect]
+  const morningOf = (on: CivilDate) => instantOf(on, morning, zone)
+  const isInside = (on: CivilDate) => startOn === null || on > startOn
+  const rungs: Rung[] = []
+  if (startBy && startBy < dueOn && isInside(startBy))
+    rungs.push({ key: 'start', at: morningOf(startBy), says: 'start', escalates: false })
+  for (const { businessDays, clockDays } of rule.ahead) {
+    const on = count(
+      { start: dueOn, length: businessDays, unit: 'business_day', direction: 'before' },
+      calendar,
+    ).dueOn
+    const isLongEnough = !clockDays || (startOn !== null && addDays(startOn, clockDays) <= dueOn)
+    if (!isInside(on) || !isLongEnough) continue
+    const escalates = rule.escalatesFrom !== null && businessDays <= rule.escalatesFrom
+    rungs.push({ key: `ahead-${businessDays}`, at: morningOf(on), says: 'ahead', escalates })
+  }
+  return [
+    ...rungs,
+    ...lastDay(rule, isInside(dueOn), morningOf(dueOn), dueAt ?? endOf(dueOn, zone)),
+  ]
+}
+
+function lastDay(
+  rule: LadderRule,
+  hasMorning: boolean,
+  morningAt: string,
+  closesAt: string,
+): Rung[] {
+  const escalates = rule.escalatesFrom !== null
+  const closes = Date.parse(closesAt)
+  const rungs: Rung[] = []
+  if (hasMorning) rungs.push({ key: 'today', at: morningAt, says: 'today', escalates })
+  if (rule.closing)
+    rungs.push({
+      key: 'closing',
+      at: new Date(closes - closingHours * 3_600_000).toISOString(),
+      says: 'closing',
+      escalates,
+    })
+  rungs.push({ key: 'missed', at: new Date(closes).toISOString(), says: 'missed', escalates })
+  return rungs
+}
+
+function endOf(on: CivilDate, zone: string): string {
+  return instantOf(addDays(on, 1), '00:00', zone)
+}
+
+function theirLadder({ obligation, zone, calendar }: LadderInput, today: CivilDate): Rung[] {
+  const rungs: Rung[] = []
+  const chaseOn = (businessDays: number) =>
+    count({ start: obligation.dueOn, length: businessDays, unit: 'business_day' }, calendar).dueOn
+  const last = chaseNumber(obligation.dueOn, today, calendar)
+  // The two latest are enough: an earlier one gives way in any case.
+  for (let no = Math.max(1, last - 1); no <= last + 1; no += 1) {
+    const on = chaseOn(1 + (no - 1) * chaseEveryBusinessDays)
+    const at = instantOf(on, morning, zone)
+    rungs.push({ key: `theirs-late-${no}`, at, says: 'theirs_late', escalates: false })
+  }
+  return rungs
+}
+
+/** How many chases lie at or before today: one the business day after, then every five. */
+function chaseNumber(dueOn: CivilDate, today: CivilDate, calendar: BusinessCalendar): number {
+  const late = -businessDaysLeft(dueOn, today, calendar)
+  return late <= 0 ? 0 : 1 + Math.floor((late - 1) / chaseEveryBusinessDays)
+}
+
+/**
+ * The assigned person, else those of the owner's role, else developers, else administrators: a
+ * clock is never without somebody who hears it. A person who is no longer active hears nothing.
+ */
+function recipientsOf(input: RungsDueInput, rung: Rung): string[] {
+  const { obligation, people, assignedId } = input
+  const holding = (role: OwnerRole) => people.filter((person) => person.roles.includes(role))
+  const assigned = people.filter((person) => person.id === assignedId)
+  const owner = obligation.ownerRole ?? (isOurs(obligation.party) ? 'developer' : 'liaison')
+  const choices = [assigned, holding(owner), holding('developer'), holding('administrator')]
+  const first = choices.find((choice) => choice.length > 0) ?? []
+  const above = rung.escalates ? [...holding('developer'), ...holding('executive')] : []
+  return [...new Set([...first, ...above].map((person) => person.id))]
+}
+
+/** The days a next date may lie in: after today, to the due date, or 30 days on once it is past. */
+export function nextDateRange(
+  dueOn: CivilDate,
+  today: CivilDate,
+): { from: CivilDate; to: CivilDate } {
+  const from = addDays(today, 1)
+  return { from, to: dueOn > today ? dueOn : addDays(today, 30) }
+}
+
+/** Business days after today up to the due date; 0 on it, negative once it is past. */
+export function businessDaysLeft(
+  dueOn: CivilDate,
+  today: CivilDate,
+  calendar: BusinessCalendar,
+): number {
+  const [from, to, sign] = today <= dueOn ? [today, dueOn, 1] : [dueOn, today, -1]
+  let days = 0
+  for (let on = addDays(from, 1); on <= to; on = addDays(on, 1))
+    if (calendar.closedBecause(on) === null) days += 1
+  return days === 0 ? 0 : sign * days
+}
