@@ -1,7 +1,7 @@
 import { existsSync, readdirSync, rmSync } from 'node:fs'
 import path from 'node:path'
 import { run } from './children.mjs'
-import { isAlive, joinUsers, oneAtATime, usersOf } from './lock.mjs'
+import { isInUse, joinUsers, oneAtATime } from './lock.mjs'
 import { localFolder, root } from './paths.mjs'
 import { say } from './say.mjs'
 import { sourceHash } from './sources.mjs'
@@ -14,7 +14,7 @@ const isBuilt = (name) => existsSync(path.join(localFolder, name, 'BUILD_ID'))
 function dropOldBuilds(current) {
   for (const name of readdirSync(localFolder)) {
     if (!/^next-[0-9a-f]{16}$/.test(name) || name === current) continue
-    if (usersOf(name).some(isAlive)) continue
+    if (isInUse(name)) continue
     rmSync(path.join(localFolder, name), { recursive: true, force: true })
     rmSync(path.join(localFolder, `${name}.users`), { recursive: true, force: true })
   }

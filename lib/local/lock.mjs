@@ -1,50 +1,52 @@
-import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
+import { existsSync, linkSync, mkdirSync, readFileSync, readdirSync } from 'node:fs'
+import { rmSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { localPath } from './paths.mjs'
 import { Stop } from './say.mjs'
 
-/** True while the process lives, also where it belongs to another user. */
-export function isAlive(pid) {
-  if (!Number.isInteger(pid) || pid <= 0) return false
+function readOr(file, fallback) {
   try {
-    process.kill(pid, 0)
-    return true
-  } catch (error) {
-    return error.code === 'EPERM'
-  }
-}
-
-function holderOf(file) {
-  try {
-    return Number(readFileSync(file, 'utf8'))
+    return readFileSync(file, 'utf8')
   } catch {
-    return 0
+    return fallback
   }
 }
 
+/** Clock tick at which the kernel started the process; '' where there is no such process. */
+function startedAt(pid) {
+  const afterName = readOr(`/proc/${pid}/stat`, '').split(') ')[1]
+  return afterName?.split(' ')[19] ?? ''
+}
+
+// A process id alone is no proof: after a restart of a container another process carries it.
+const markOf = (pid) => `${pid} ${startedAt(pid)}`
+const pidIn = (mark) => Number(mark.split(' ')[0])
+const isAlive = (mark) => startedAt(pidIn(mark)) !== '' && mark === markOf(pidIn(mark))
+
+/** Takes a lock file in one step: it appears with its content or not at all. */
 function tryTake(file) {
+  const draft = `${file}.${process.pid}`
+  writeFileSync(draft, markOf(process.pid))
   try {
-    writeFileSync(file, String(process.pid), { flag: 'wx' })
+    linkSync(draft, file)
     return true
   } catch (error) {
     if (error.code !== 'EEXIST') throw error
-    const holder = holderOf(file)
-    if (holder === process.pid) return true
-    if (!isAlive(holder)) rmSync(file, { force: true })
+    if (!isAlive(readOr(file, ''))) rmSync(file, { force: true })
     return false
+  } finally {
+    rmSync(draft, { force: true })
   }
 }
 
-/** Takes the lock for this process's life or refuses in one line; returns its release. */
+/** Takes the lock for this process's life; `refusal(pid)` is the one line for whoever comes second. */
 export function takeLock(name, refusal) {
   const file = localPath(`${name}.lock`)
-  if (!tryTake(file) && !tryTake(file)) throw new Stop(refusal(holderOf(file)))
-  const release = () => {
-    if (holderOf(file) === process.pid) rmSync(file, { force: true })
-  }
-  process.once('exit', release)
-  return release
+  if (!tryTake(file) && !tryTake(file)) throw new Stop(refusal(pidIn(readOr(file, ''))))
+  process.once('exit', () => {
+    if (readOr(file, '') === markOf(process.pid)) rmSync(file, { force: true })
+  })
 }
 
 /** Runs `work` while no other process of this checkout runs under the same name. */
@@ -58,23 +60,28 @@ export async function oneAtATime(name, work) {
   }
 }
 
-const usersFolder = (name) => localPath(`${name}.users`, '.')
+const usersFolder = (name) => localPath(`${name}.users`)
 
-/** Process ids noted as users of a shared thing; some may have died since. */
-export function usersOf(name) {
+/** Marks of the living users of a shared thing; the dead are forgotten on the way. */
+function livingUsers(name) {
   const folder = usersFolder(name)
-  return existsSync(folder) ? readdirSync(folder).map(Number) : []
+  if (!existsSync(folder)) return []
+  const files = readdirSync(folder).map((file) => path.join(folder, file))
+  const dead = files.filter((file) => !isAlive(readOr(file, '')))
+  for (const file of dead) rmSync(file, { force: true })
+  return files.filter((file) => !dead.includes(file))
 }
+
+export const isInUse = (name) => livingUsers(name).length > 0
 
 /** Notes this process as a user; the returned leave() says whether it was the last one alive. */
 export function joinUsers(name) {
   const folder = usersFolder(name)
   mkdirSync(folder, { recursive: true })
-  writeFileSync(path.join(folder, String(process.pid)), '')
+  const mine = path.join(folder, String(process.pid))
+  writeFileSync(mine, markOf(process.pid))
   return function leave() {
-    rmSync(path.join(folder, String(process.pid)), { force: true })
-    const [alive, dead] = [usersOf(name).filter(isAlive), usersOf(name).filter((p) => !isAlive(p))]
-    for (const pid of dead) rmSync(path.join(folder, String(pid)), { force: true })
-    return alive.length === 0
+    rmSync(mine, { force: true })
+    return !isInUse(name)
   }
 }

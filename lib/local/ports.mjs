@@ -48,7 +48,8 @@ export async function webPort(host, first = 3000) {
   throw new Stop(`No free port between ${first} and ${first + 99}. Set PORT.`)
 }
 
-function accepts(port, host) {
+/** True where somebody takes connections on the port. */
+export function accepts(port, host) {
   return new Promise((resolve) => {
     const socket = connect({ port, host })
     socket.once('connect', () => resolve(socket.destroy() && true))

@@ -28,6 +28,8 @@ export async function ensureRoles(server) {
   const owner = secret('postgres:owner')
   const app = secret('postgres:app')
   await withClient(server.adminUrl, async (client) => {
+    // Two processes at once would change the same catalog row, which PostgreSQL refuses.
+    await client.query('select pg_advisory_lock(7305212)')
     await ensureRole(client, ownerRole, owner)
     await ensureRole(client, appRole, app)
   })
