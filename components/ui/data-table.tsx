@@ -80,7 +80,7 @@ function HeaderCell<Row>({ column, table }: { column: Column<Row>; table: DataTa
       scope="col"
       aria-sort={order}
       className={clsx(
-        'border-ink bg-film text-th text-ink-2 sticky top-0 z-[1] border-b-[1.5px] py-2 pr-3 font-medium font-stretch-[86%] last:pr-0',
+        'border-ink bg-film text-th text-ink-2 sticky top-0 z-[1] border-b-[1.5px] py-2 pr-4 font-medium font-stretch-[86%] last:pr-0',
         column.align === 'end' ? 'text-right' : 'text-left',
         column.className,
       )}

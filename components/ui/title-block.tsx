@@ -16,27 +16,29 @@ export interface TitleCell {
 
 /** The ruled box of a drawing: caption above value, cell by cell; two columns on a phone. */
 export function TitleBlock({ cells, label }: { cells: readonly TitleCell[]; label?: string }) {
+  const isOdd = cells.filter((cell) => !cell.heading).length % 2 === 1
   return (
     <dl
       aria-label={label}
       className="border-ink bg-sheet grid grid-cols-2 overflow-hidden border-[1.5px] sm:flex sm:flex-wrap print:mb-4"
     >
-      {cells.map((cell) => (
-        <Cell key={cell.caption} cell={cell} />
+      {cells.map((cell, index) => (
+        <Cell key={cell.caption} cell={cell} isAlone={isOdd && index === cells.length - 1} />
       ))}
     </dl>
   )
 }
 
 /* Each cell draws its right and lower rule one pixel outside itself, so that the frame hides the last. */
-function Cell({ cell }: { cell: TitleCell }) {
+/* `isAlone`: the last cell of an odd number, which takes both columns of a phone. */
+function Cell({ cell, isAlone }: { cell: TitleCell; isAlone: boolean }) {
   const { caption, value, grow = 1, mono, heading, note } = cell
   return (
     <div
       style={{ flexGrow: grow }}
       className={clsx(
         'border-ink -mr-px -mb-px min-w-0 border-r border-b px-3.5 pt-2.5 pb-3 sm:min-w-28 sm:basis-auto',
-        heading && 'max-sm:col-span-2',
+        (heading || isAlone) && 'max-sm:col-span-2',
       )}
     >
       <dt className="cap">{caption}</dt>

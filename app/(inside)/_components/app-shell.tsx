@@ -25,14 +25,13 @@ export function AppShell({ name, role, entries, theme, children }: AppShellProps
       <a href="#main" className="skip-link">
         Skip to the page
       </a>
-      <header
-        data-screen-only
-        className="border-ink flex h-13 items-center gap-7 border-b px-4 md:px-8"
-      >
-        <Brand />
-        <TopNav entries={entries} />
-        <div className="ml-auto self-stretch">
-          <AccountMenu name={name} role={role} theme={theme} />
+      <header data-screen-only className="border-ink border-b">
+        <div className="mx-auto flex h-13 max-w-[1560px] items-center gap-7 px-4 md:px-8">
+          <Brand />
+          <TopNav entries={entries} />
+          <div className="ml-auto self-stretch">
+            <AccountMenu name={name} role={role} theme={theme} />
+          </div>
         </div>
       </header>
       <main
