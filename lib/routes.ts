@@ -87,8 +87,12 @@ export const api = {
   assignments: () => '/api/assignments',
   entries: (filter?: Filter) => withQuery('/api/entries', filter),
   entry: (id: string) => `/api/entries/${part(id)}`,
+  entryChoices: (applicationId: string) => withQuery('/api/entries/choices', { applicationId }),
+  entryFromEml: () => '/api/entries/from-eml',
+  repliesOwed: (filter?: Filter) => withQuery('/api/entries/replies-owed', filter),
   files: (filter?: Filter) => withQuery('/api/files', filter),
-  file: (sha256: string) => `/api/files/${part(sha256)}`,
+  /** A download by the id of the file's place. */
+  file: (linkId: string) => `/api/files/${part(linkId)}`,
   projects: () => '/api/projects',
   organizations: () => '/api/organizations',
   organization: (id: string) => `/api/organizations/${part(id)}`,
