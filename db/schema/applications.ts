@@ -128,6 +128,7 @@ export const obligations = pgTable(
     obligation: text().notNull().default(''),
     applicationId: uuid().references(() => applications.id),
     title: text().notNull(),
+    short: text(),
     stage: text().notNull(),
     party: text().$type<StepParty>().notNull(),
     kind: text().$type<StepKind>().notNull(),

@@ -256,3 +256,17 @@ export function businessDaysLeft(
     if (calendar.closedBecause(on) === null) days += 1
   return days === 0 ? 0 : sign * days
 }
+
+/** What an obligation's key names. @throws RangeError for any other text. */
+export function obligationOfKey(key: string) {
+  const [subjectKind, subjectId, step, instance, obligation] = key.split('/')
+  if (
+    !subjectKind ||
+    !subjectId ||
+    !step ||
+    !/^\d+$/.test(instance ?? '') ||
+    obligation === undefined
+  )
+    throw new RangeError(`Found "${key}"; the key of an obligation is needed.`)
+  return { subjectKind, subjectId, step, instance: Number(instance), obligation }
+}

@@ -13,7 +13,8 @@ export const civilDateSchema = z
 /** ISO 8601 with offset. */
 export const instantSchema = z.iso.datetime({
   offset: true,
-  error: (issue) => `Found ${show(issue.input)}; an instant such as 2026-11-30T16:52:00-05:00 is needed.`,
+  error: (issue) =>
+    `Found ${show(issue.input)}; an instant such as 2026-11-30T16:52:00-05:00 is needed.`,
 })
 
 export const shortText = (label: string, max = 200) =>

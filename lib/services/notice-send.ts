@@ -1,4 +1,4 @@
-import { and, asc, eq, isNull, lte, or, sql } from 'drizzle-orm'
+import { and, asc, eq, inArray, isNull, lte, or, sql } from 'drizzle-orm'
 import { notices } from '@/db/schema/applications'
 import { pauseAfterAttempt, type Delivery, type Mailer } from '@/lib/domain/delivery'
 import { authorize, type Context } from '@/lib/services/context'
@@ -36,7 +36,7 @@ export async function sendNotices(
 
 function takeDue(ctx: Context, limit: number): Promise<NoticeRow[]> {
   return ctx.db.transaction(async (tx) => {
-    const due = tx
+    const due = await tx
       .select({ id: notices.id })
       .from(notices)
       .where(
@@ -50,10 +50,12 @@ function takeDue(ctx: Context, limit: number): Promise<NoticeRow[]> {
       .orderBy(asc(notices.nextAttemptAt), asc(notices.createdAt))
       .limit(limit)
       .for('update', { skipLocked: true })
+    if (due.length === 0) return []
+    const ids = due.map((row) => row.id)
     return tx
       .update(notices)
       .set({ leaseUntil: secondsAfter(ctx.now, leaseSeconds) })
-      .where(sql`${notices.id} in (${due})`)
+      .where(inArray(notices.id, ids))
       .returning()
   })
 }

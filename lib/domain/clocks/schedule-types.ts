@@ -45,6 +45,8 @@ export interface ScheduledItem {
   /** Empty for the step itself. */
   obligation: string
   title: string
+  /** For labels on drawings. */
+  short: string | null
   stage: string
   party: StepParty
   kind: StepKind

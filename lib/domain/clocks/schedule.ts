@@ -110,6 +110,7 @@ function blankNode(graph: Graph, step: Step, instance: number): Node {
     instance,
     obligation: '',
     title: step.title,
+    short: step.short ?? null,
     stage: step.stage,
     party: step.party,
     kind: step.kind,
