@@ -7,7 +7,7 @@ import { databaseEnv, tsx } from './services.mjs'
 import { cloneTemplate, forgetSurroundings, startTestDatabases } from './test-database.mjs'
 
 // Every file of lib/local/bench, one after the other; `npm run bench -- name` runs those named so.
-const house = household()
+const house = household('bench')
 const folder = path.join(import.meta.dirname, 'bench')
 const asked = process.argv.slice(2)
 const chosen = (file) => asked.length === 0 || asked.some((name) => file.includes(name))

@@ -1,22 +1,23 @@
-import { existsSync, readdirSync, rmSync } from 'node:fs'
+import { existsSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { run } from './children.mjs'
 import { isInUse, joinUsers, oneAtATime } from './lock.mjs'
-import { localFolder, root } from './paths.mjs'
+import { buildsFolder, isUsualFolder, root } from './paths.mjs'
 import { say } from './say.mjs'
 import { sourceHash } from './sources.mjs'
 
 export const nextBin = 'node_modules/next/dist/bin/next'
 
-const isBuilt = (name) => existsSync(path.join(localFolder, name, 'BUILD_ID'))
+// Written when the build has ended well; a build that was killed may leave everything but this.
+const finished = (name) => path.join(buildsFolder, name, 'finished')
 
 /** Removes builds of other sources that no living process serves. */
 function dropOldBuilds(current) {
-  for (const name of readdirSync(localFolder)) {
+  for (const name of readdirSync(buildsFolder)) {
     if (!/^next-[0-9a-f]{16}$/.test(name) || name === current) continue
     if (isInUse(name)) continue
-    rmSync(path.join(localFolder, name), { recursive: true, force: true })
-    rmSync(path.join(localFolder, `${name}.users`), { recursive: true, force: true })
+    rmSync(path.join(buildsFolder, name), { recursive: true, force: true })
+    rmSync(path.join(buildsFolder, `${name}.users`), { recursive: true, force: true })
   }
 }
 
@@ -30,12 +31,13 @@ export async function ensureBuild() {
     const name = `next-${sourceHash()}`
     const distDir = `.local/${name}`
     joinUsers(name)
-    dropOldBuilds(name)
-    if (isBuilt(name)) return distDir
+    if (isUsualFolder) dropOldBuilds(name)
+    if (existsSync(finished(name))) return distDir
     say('Building (about a minute) ...')
     rmSync(path.join(root, distDir), { recursive: true, force: true })
     const env = { LINESIDE_DIST_DIR: distDir, NODE_ENV: 'production', NEXT_TELEMETRY_DISABLED: '1' }
     await run('build', [nextBin, 'build'], { env })
+    writeFileSync(finished(name), '')
     return distDir
   })
 }

@@ -5,7 +5,7 @@ import { staticChecks } from './static-checks.mjs'
 import { report, vitestSuite } from './suites.mjs'
 
 // Format, lint, types and unit tests: what takes under a minute and needs no database.
-const house = household()
+const house = household('check')
 
 try {
   ensureNode()

@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process'
 import { closeSync, openSync, readFileSync } from 'node:fs'
+import { noteChild } from './orphans.mjs'
 import { localPath, root } from './paths.mjs'
 import { Stop, complain, say } from './say.mjs'
 
@@ -7,8 +8,9 @@ import { Stop, complain, say } from './say.mjs'
  * Keeps what was started and ends it in the order of its list. A child that ends by itself ends
  * all the others; a signal does the same. Each child leads a process group of its own, so that
  * Ctrl-C reaches only this process, which then stops them one after the other.
+ * @param command name of the lock that the command takes; its children are noted under it
  */
-export function household() {
+export function household(command) {
   const children = []
   const closers = []
   let ending = null
@@ -16,7 +18,7 @@ export function household() {
   async function end(code) {
     ending ??= (async () => {
       for (const pid of runningCommands) signalGroup(pid, 'SIGTERM')
-      for (const child of children) await endChild(child)
+      for (const child of inOrder(children)) await endChild(child)
       for (const pid of runningCommands) signalGroup(pid, 'SIGKILL')
       for (const close of closers.toReversed()) await close().catch(complain)
     })()
@@ -33,12 +35,14 @@ export function household() {
     /** Adds what is closed after all children, the last added first. */
     onEnd: (close) => closers.push(close),
     isEnding: () => ending !== null,
-    /** Starts a child that has to live as long as this process. */
-    start(name, args, { env = {}, show = false } = {}) {
+    /** Starts a child that has to live as long as this process; `last` ends it after the others. */
+    start(name, args, { env = {}, show = false, last = false } = {}) {
       if (ending) throw new Stop(`${name} is not started: everything is being stopped.`)
       const child = spawnChild(name, args, env, show)
-      children.push(child)
+      children.push({ ...child, last })
+      const forget = noteChild(command, child.process.pid)
       child.process.once('exit', (code, signal) => {
+        forget()
         if (ending) return
         say(`${name} ended (${signal ?? `exit ${code}`}); stopping everything.`)
         if (!show) say(lastLines(child.log))
@@ -46,14 +50,14 @@ export function household() {
       })
       return child
     },
-    /** Ends one child early. */
-    async stop(child) {
-      children.splice(children.indexOf(child), 1)
-      child.process.removeAllListeners('exit')
-      await endChild(child)
-    },
   }
 }
+
+/** As started, but what the others still write to while they end comes last. */
+const inOrder = (children) => [
+  ...children.filter((child) => !child.last),
+  ...children.filter((child) => child.last),
+]
 
 function spawnChild(name, args, env, show) {
   const log = localPath('log', `${name}.log`)
@@ -61,7 +65,12 @@ function spawnChild(name, args, env, show) {
   const options = { cwd: root, env: { ...process.env, ...env }, detached: true }
   const child = spawn(process.execPath, args, { ...options, stdio: ['ignore', out, out] })
   if (!show) closeSync(out)
-  return { name, log, process: child, isGone: () => child.exitCode !== null || child.signalCode }
+  return {
+    name,
+    log,
+    process: child,
+    isGone: () => child.exitCode !== null || child.signalCode !== null,
+  }
 }
 
 /** The end of a log, for the person who has to find out why a child ended. */

@@ -14,9 +14,9 @@ import { appSecrets, demoPassword } from './secrets.mjs'
 import { databaseEnv, migrate, openDatabase, recreate } from './services.mjs'
 import { addressOf, startWorkers } from './web.mjs'
 
-const house = household()
 const host = process.env.HOST || '127.0.0.1'
 const has = (flag) => process.argv.includes(flag)
+const house = household(has('--services') ? 'dev-services' : 'dev')
 const envFile = () => localPath('dev.env')
 
 /** A shell that has read `.local/dev.env` still means our own database and mail. */
@@ -42,6 +42,7 @@ async function ready(database, env) {
 
 /** `--services`: database and mail for whoever starts the rest by hand, told in `.local/dev.env`. */
 async function servicesOnly() {
+  takeLock('dev-services', (pid) => `Development services are up already (process ${pid}).`)
   const database = await prepare()
   const mail = await startMail(house, { remember: true, name: 'dev-mail' })
   const env = { ...appEnv({ database, mail, address: addressOf(host, 3100) }) }

@@ -6,7 +6,7 @@ import { report, vitestSuite } from './suites.mjs'
 import { forgetSurroundings, startTestDatabases } from './test-database.mjs'
 
 // Tests that kill processes and fill limits, apart from `npm test` because they take minutes.
-const house = household()
+const house = household('faults')
 
 try {
   packages.ensureNode()

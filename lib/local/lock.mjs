@@ -1,28 +1,10 @@
-import { existsSync, linkSync, mkdirSync, readFileSync, readdirSync } from 'node:fs'
-import { rmSync, writeFileSync } from 'node:fs'
+import { existsSync, linkSync, mkdirSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
+import { endOrphans } from './orphans.mjs'
 import { localPath } from './paths.mjs'
+import { isAlive, markOf, pidIn, readOr } from './process-mark.mjs'
 import { Stop } from './say.mjs'
-
-function readOr(file, fallback) {
-  try {
-    return readFileSync(file, 'utf8')
-  } catch {
-    return fallback
-  }
-}
-
-/** Clock tick at which the kernel started the process; '' where there is no such process. */
-function startedAt(pid) {
-  const afterName = readOr(`/proc/${pid}/stat`, '').split(') ')[1]
-  return afterName?.split(' ')[19] ?? ''
-}
-
-// A process id alone is no proof: after a restart of a container another process carries it.
-const markOf = (pid) => `${pid} ${startedAt(pid)}`
-const pidIn = (mark) => Number(mark.split(' ')[0])
-const isAlive = (mark) => startedAt(pidIn(mark)) !== '' && mark === markOf(pidIn(mark))
 
 /** Takes a lock file in one step: it appears with its content or not at all. */
 function tryTake(file) {
@@ -40,13 +22,17 @@ function tryTake(file) {
   }
 }
 
-/** Takes the lock for this process's life; `refusal(pid)` is the one line for whoever comes second. */
+/**
+ * Takes the lock for this process's life; `refusal(pid)` is the one line for whoever comes second.
+ * What an earlier, killed holder left running is ended.
+ */
 export function takeLock(name, refusal) {
   const file = localPath(`${name}.lock`)
   if (!tryTake(file) && !tryTake(file)) throw new Stop(refusal(pidIn(readOr(file, ''))))
   process.once('exit', () => {
     if (readOr(file, '') === markOf(process.pid)) rmSync(file, { force: true })
   })
+  endOrphans(name)
 }
 
 /** Runs `work` while no other process of this checkout runs under the same name. */

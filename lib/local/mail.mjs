@@ -13,7 +13,7 @@ export async function startMail(house, { remember = false, name = 'mail' } = {})
   if (remember) keep({ mailPort: smtp, mailPagePort: web })
   const where = ['--ip', '127.0.0.1', '--smtp', String(smtp), '--web-ip', '127.0.0.1']
   const args = ['node_modules/maildev/bin/maildev', ...where, '--web', String(web)]
-  const child = house.start(name, args)
+  const child = house.start(name, args, { last: true })
   await waitForPort(smtp, 'The SMTP fake', { gaveUp: child.isGone })
   await waitForPort(web, 'The page of the SMTP fake', { gaveUp: child.isGone })
   return { url: `smtp://127.0.0.1:${smtp}`, page: `http://127.0.0.1:${web}`, child }

@@ -5,11 +5,20 @@ import path from 'node:path'
 /** Root of the checkout, where package.json is. */
 export const root = path.resolve(import.meta.dirname, '../..')
 
-/** Folder of everything made on this machine; ignored by git. */
-export const localFolder = path.join(root, '.local')
+const usualFolder = path.join(root, '.local')
+
+/**
+ * Folder of everything made on this machine; ignored by git. LINESIDE_LOCAL names another, which
+ * lets the tests of the start command run beside a started Lineside.
+ */
+export const localFolder = process.env.LINESIDE_LOCAL || usualFolder
+export const isUsualFolder = localFolder === usualFolder
+
+/** Builds lie in the checkout whatever the folder: Next wants them below its root. */
+export const buildsFolder = usualFolder
 
 /** Twelve hex digits that tell this checkout from another on the same machine. */
-export const checkoutKey = createHash('sha256').update(root).digest('hex').slice(0, 12)
+export const checkoutKey = createHash('sha256').update(localFolder).digest('hex').slice(0, 12)
 
 /** Absolute path inside `.local`, whose folder is made if it is missing. */
 export function localPath(...parts) {

@@ -12,7 +12,7 @@ import { demoPassword } from './secrets.mjs'
 import { migrate, openDatabase } from './services.mjs'
 import { addressOf, startWeb, startWorkers } from './web.mjs'
 
-const house = household()
+const house = household('start')
 const host = process.env.HOST || '127.0.0.1'
 
 async function prepare() {

@@ -8,7 +8,7 @@ import { report, vitestSuite } from './suites.mjs'
 import { forgetSurroundings, startTestDatabases } from './test-database.mjs'
 
 // `npm test` runs everything. `npm test -- unit browser` runs only what is named.
-const house = household()
+const house = household('test')
 const names = ['static', 'unit', 'zones', 'reference', 'integration', 'browser']
 const asked = process.argv.slice(2)
 const wants = (name) => asked.length === 0 || asked.includes(name)
