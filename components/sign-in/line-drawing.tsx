@@ -10,12 +10,14 @@ interface StepLabel {
   note: string
   party: 'ours' | 'theirs'
   far?: boolean
+  /** A gate's bar reaches down to its words. */
+  isGate?: boolean
 }
 
 const labels: readonly StepLabel[] = [
   { x: 116, name: 'Filed', note: 'gate 0', party: 'ours' },
   { x: 208, name: 'Scoping meeting', note: 'held', party: 'theirs' },
-  { x: 300, name: 'Gate 1', note: 'closed', party: 'ours' },
+  { x: 300, name: 'Gate 1', note: 'closed', party: 'ours', isGate: true },
   { x: 396, name: 'Study report', note: 'received', party: 'theirs' },
   { x: 484, name: 'Agreement', note: 'to sign', party: 'ours' },
   { x: 582, name: 'Facilities', note: 'forecast', party: 'theirs', far: true },
@@ -95,13 +97,15 @@ function FarLine({ palette }: { palette: Palette }) {
 
 /** Ours below the line, theirs above it. */
 function StepWords({ label, palette }: { label: StepLabel; palette: Palette }) {
-  const { x, name, note, party, far } = label
+  const { x, name, note, party, far, isGate } = label
   const y = party === 'ours' ? line + 50 : line - 50
   const shared = { x, palette, anchor: 'middle' as const }
   const lead = party === 'ours' ? [line + 12, y - 14] : [y + 22, line - 12]
   return (
     <g>
-      <path d={`M${x} ${lead[0]} V${lead[1]}`} stroke={palette.rule} strokeWidth={1} />
+      {isGate ? null : (
+        <path d={`M${x} ${lead[0]} V${lead[1]}`} stroke={palette.rule} strokeWidth={1} />
+      )}
       <Label
         {...shared}
         y={y}

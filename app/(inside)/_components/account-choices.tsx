@@ -1,7 +1,7 @@
 'use client'
 
 import { useState } from 'react'
-import { MenuChoices, MenuItem, MenuRule } from '@/components/ui/menu'
+import { MenuChoices, MenuItem, MenuLink, MenuRule } from '@/components/ui/menu'
 import { chooseTheme, type Theme } from '@/lib/client/theme'
 import { routes } from '@/lib/routes'
 
@@ -39,6 +39,7 @@ export function AccountChoices({ theme, onTheme }: AccountChoicesProps) {
     <>
       <MenuChoices label="Theme" value={theme} options={themeOptions} onChange={onTheme} />
       <MenuRule />
+      <MenuLink href={routes.settings()}>Your account</MenuLink>
       <MenuItem onSelect={signOutHere}>Sign out</MenuItem>
     </>
   )
