@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { channels } from '@/lib/domain/clocks/facts'
+import { recordableStepSchema } from '@/lib/schemas/application'
 import { civilDateSchema, shortText, show, uuid } from '@/lib/schemas/common'
 import { factInput } from '@/lib/schemas/fact'
 import { fileLinkSchema, sha256Schema, uploadedFileSchema } from '@/lib/schemas/file'
@@ -169,14 +170,6 @@ export const emlDraftSchema = z.object({
   recordedAs: uuid.nullable(),
 })
 export type EmlDraft = z.infer<typeof emlDraftSchema>
-
-export const recordableStepSchema = z.object({
-  step: z.string(),
-  instance: z.number().int(),
-  title: z.string(),
-  party: z.string(),
-  outcomes: z.array(z.object({ key: z.string(), title: z.string() })),
-})
 
 /** What the form offers for one application. */
 export const entryChoicesSchema = z.object({

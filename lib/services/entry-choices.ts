@@ -34,13 +34,7 @@ export async function getEntryChoices(ctx: Context, applicationId: string): Prom
         .map((person) => (person.desk ? `${person.name}, ${person.desk}` : person.name)),
     })),
     others,
-    steps: steps.map(({ step, instance, title, party, outcomes }) => ({
-      step,
-      instance,
-      title,
-      party,
-      outcomes: outcomes.map(({ key, title: words }) => ({ key, title: words })),
-    })),
+    steps,
   }
 }
 
