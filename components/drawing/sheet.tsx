@@ -45,10 +45,14 @@ interface LabelProps {
   fill: string
   palette: Palette
   anchor?: 'start' | 'middle' | 'end'
+  /** Color of the ground, where the text lies on rules that should stop short of it. */
+  halo?: string
 }
 
 /** One line of text in one of the shipped faces. */
-export function Label({ x, y, text, face, size, fill, palette, anchor = 'start' }: LabelProps) {
+export function Label(props: LabelProps) {
+  const { x, y, text, face, size, fill, palette, anchor = 'start', halo } = props
+  const outline = halo === undefined ? {} : { stroke: halo, strokeWidth: 4, paintOrder: 'stroke' }
   return (
     <text
       x={px(x)}
@@ -58,6 +62,7 @@ export function Label({ x, y, text, face, size, fill, palette, anchor = 'start' 
       fontSize={size}
       fill={fill}
       textAnchor={anchor}
+      {...outline}
     >
       {text}
     </text>

@@ -3,10 +3,12 @@ export type Face = 'sans400' | 'sans500' | 'sans600' | 'sans700' | 'mono400'
 /** Advance widths per face and character, in thousandths of an em. */
 export type Metrics = Readonly<Record<Face, Readonly<Record<string, number>>>>
 
+const NO_BREAK_SPACE = '\u00a0'
 const DIGITS = '0123456789'
 
 function advance(char: string, widths: Readonly<Record<string, number>>): number {
-  const own = DIGITS.includes(char) ? widestDigit(widths) : widths[char]
+  const key = char === NO_BREAK_SPACE ? ' ' : char
+  const own = DIGITS.includes(key) ? widestDigit(widths) : widths[key]
   return own ?? widths['W'] ?? 1000
 }
 
@@ -26,8 +28,8 @@ export function textWidth(text: string, face: Face, sizePx: number, metrics: Met
 }
 
 /**
- * Breaks text into lines no wider than `maxPx`. Words longer than a line are cut. Never returns an
- * empty array.
+ * Breaks text at spaces into lines no wider than `maxPx`. Words longer than a line are cut. Never
+ * returns an empty array.
  */
 export function wrapText(
   text: string,
@@ -39,7 +41,7 @@ export function wrapText(
   const fits = (line: string) => textWidth(line, face, sizePx, metrics) <= maxPx
   const lines: string[] = []
   let line = ''
-  for (const word of text.split(/\s+/).filter(Boolean)) {
+  for (const word of text.split(/[ \t\n]+/).filter(Boolean)) {
     const joined = line === '' ? word : `${line} ${word}`
     if (fits(joined)) {
       line = joined
@@ -65,6 +67,20 @@ function cutWord(word: string, fits: (line: string) => boolean): string[] {
     piece += char
   }
   return [...pieces, piece]
+}
+
+const UNIT = /(\d) (?=(?:[kMG]?(?:VA|Wac|Wdc|Wh|W|V)|A|%)(?=$|[\s,;]))/g
+
+/** Binds figures to their units and factors by no-break spaces, so that no line ends between them. */
+export function bindUnits(text: string): string {
+  return text
+    .replace(UNIT, `$1${NO_BREAK_SPACE}`)
+    .replace(/ × /g, `${NO_BREAK_SPACE}×${NO_BREAK_SPACE}`)
+}
+
+/** Width of the widest unbreakable piece of a text, px. */
+export function widestWord(text: string, face: Face, sizePx: number, metrics: Metrics): number {
+  return widestLine(text.split(/[ \t\n]+/), face, sizePx, metrics)
 }
 
 /** Wraps to at most `maxLines`; what does not fit ends in an ellipsis. */
