@@ -2,6 +2,7 @@ import type { BusinessCalendar } from '@/lib/domain/clocks/calendar'
 import { addDays, type CivilDate } from '@/lib/domain/clocks/civil-date'
 import { count } from '@/lib/domain/clocks/count'
 import type { MissEffect, OwnerRole, StepParty } from '@/lib/domain/clocks/procedure'
+import { businessDaysTo } from '@/lib/domain/clocks/standing'
 import { instantOf, localOf } from '@/lib/domain/clocks/zoned'
 
 /** Notices about clocks: which rung of the ladder is due, and who hears it. Common practice, no source. */
@@ -106,17 +107,6 @@ const ladders: Record<MissEffect, LadderRule> = {
   track: onlyTracked,
 }
 
-/** The key an obligation's notices hang on: stable while the procedure is computed anew. */
-export function obligationKey(of: {
-  subjectKind: string
-  subjectId: string
-  step: string
-  instance: number
-  obligation: string
-}): string {
-  return [of.subjectKind, of.subjectId, of.step, of.instance, of.obligation].join('/')
-}
-
 /** Whether the applicant owes it; what others owe is chased once it is late. */
 export function isOurs(party: StepParty): boolean {
   return party === 'applicant' || party === 'both'
@@ -192,7 +182,9 @@ function lastDay(
       says: 'closing',
       escalates,
     })
-  rungs.push({ key: 'missed', at: new Date(closes).toISOString(), says: 'missed', escalates })
+  // The closing instant itself is still in time.
+  const missedAt = new Date(closes + 60_000).toISOString()
+  rungs.push({ key: 'missed', at: missedAt, says: 'missed', escalates })
   return rungs
 }
 
@@ -216,7 +208,7 @@ function theirLadder({ obligation, zone, calendar }: LadderInput, today: CivilDa
 
 /** How many chases lie at or before today: one the business day after, then every five. */
 function chaseNumber(dueOn: CivilDate, today: CivilDate, calendar: BusinessCalendar): number {
-  const late = -businessDaysLeft(dueOn, today, calendar)
+  const late = -businessDaysTo(calendar, today, dueOn)
   return late <= 0 ? 0 : 1 + Math.floor((late - 1) / chaseEveryBusinessDays)
 }
 
@@ -233,40 +225,4 @@ function recipientsOf(input: RungsDueInput, rung: Rung): string[] {
   const first = choices.find((choice) => choice.length > 0) ?? []
   const above = rung.escalates ? [...holding('developer'), ...holding('executive')] : []
   return [...new Set([...first, ...above].map((person) => person.id))]
-}
-
-/** The days a next date may lie in: after today, to the due date, or 30 days on once it is past. */
-export function nextDateRange(
-  dueOn: CivilDate,
-  today: CivilDate,
-): { from: CivilDate; to: CivilDate } {
-  const from = addDays(today, 1)
-  return { from, to: dueOn > today ? dueOn : addDays(today, 30) }
-}
-
-/** Business days after today up to the due date; 0 on it, negative once it is past. */
-export function businessDaysLeft(
-  dueOn: CivilDate,
-  today: CivilDate,
-  calendar: BusinessCalendar,
-): number {
-  const [from, to, sign] = today <= dueOn ? [today, dueOn, 1] : [dueOn, today, -1]
-  let days = 0
-  for (let on = addDays(from, 1); on <= to; on = addDays(on, 1))
-    if (calendar.closedBecause(on) === null) days += 1
-  return days === 0 ? 0 : sign * days
-}
-
-/** What an obligation's key names. @throws RangeError for any other text. */
-export function obligationOfKey(key: string) {
-  const [subjectKind, subjectId, step, instance, obligation] = key.split('/')
-  if (
-    !subjectKind ||
-    !subjectId ||
-    !step ||
-    !/^\d+$/.test(instance ?? '') ||
-    obligation === undefined
-  )
-    throw new RangeError(`Found "${key}"; the key of an obligation is needed.`)
-  return { subjectKind, subjectId, step, instance: Number(instance), obligation }
 }

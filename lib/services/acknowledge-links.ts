@@ -3,10 +3,10 @@ import type { Db, Tx } from '@/db/client'
 import { applications, applicationStates, notices, projects } from '@/db/schema/applications'
 import { people } from '@/db/schema/people'
 import type { Role } from '@/lib/domain/access'
-import { nextDateRange, obligationOfKey } from '@/lib/domain/notices'
+import { nextDateRange, obligationOfKey } from '@/lib/domain/obligations'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import type { Acknowledgement, LinkAcknowledgement } from '@/lib/schemas/notice'
-import { findObligation, recordAcknowledgement } from '@/lib/services/acknowledgements'
+import { findObligation, recordAcknowledgement, runningDue } from '@/lib/services/acknowledgements'
 import { ServiceError } from '@/lib/services/errors'
 import type { Visit } from '@/lib/services/one-time-links'
 import { hashOfSecret } from '@/lib/services/secrets'
@@ -55,10 +55,11 @@ export async function inspectAcknowledgeLink(
   if (refused) return { state: refused }
   const found = notice!
   const obligation = await findObligation(visit.db, refOf(found))
-  if (obligation?.status !== 'open' || !obligation.dueOn) return { state: 'closed' }
-  if (obligation.dueOn !== found.dueOn) return { state: 'moved' }
-  const { title, dueOn, dueAt, zone, consequence } = obligation
-  const range = nextDateRange(dueOn, localOf(visit.now.toISOString(), zone).on)
+  const due = obligation && runningDue(obligation)
+  if (!due) return { state: 'closed' }
+  if (due.dueOn !== found.dueOn) return { state: 'moved' }
+  const { title, zone, consequence } = obligation
+  const range = nextDateRange(due.dueOn, localOf(visit.now.toISOString(), zone).on)
   return {
     state: 'open',
     applicationId: found.applicationId!,
@@ -66,8 +67,7 @@ export async function inspectAcknowledgeLink(
     requestNo: found.requestNo,
     personName: found.personName,
     title,
-    dueOn,
-    dueAt: dueAt?.toISOString() ?? null,
+    ...due,
     zone,
     consequence: consequence.say,
     ...range,

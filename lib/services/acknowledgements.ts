@@ -2,7 +2,7 @@ import { and, eq } from 'drizzle-orm'
 import type { Db, Tx } from '@/db/client'
 import { acknowledgements, obligations } from '@/db/schema/applications'
 import { formatDate } from '@/lib/domain/format-date'
-import { nextDateRange } from '@/lib/domain/notices'
+import { nextDateRange, workingDue } from '@/lib/domain/obligations'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import type { Acknowledgement, AcknowledgementInput } from '@/lib/schemas/notice'
 import { recordAudit } from '@/lib/services/audit'
@@ -38,9 +38,9 @@ export async function recordAcknowledgement(
 ): Promise<Acknowledgement> {
   const obligation = await findObligation(tx, input)
   if (!obligation) throw notFound('clock')
-  checkAcknowledgeable(obligation, input.dueOn)
-  checkNextDate(ctx, obligation, input.untilOn)
-  const { id, applicationId, step, instance, dueOn, reason, untilOn } = input
+  const dueOn = dueOfRunning(obligation, input.dueOn)
+  checkNextDate(ctx, obligation.zone, dueOn, input.untilOn)
+  const { id, applicationId, step, instance, reason, untilOn } = input
   const key = { applicationId, step, instance, obligation: input.obligation }
   const row = { id, ...key, dueOn, reason, untilOn, personId: personOf(ctx).id }
   const added = await tx
@@ -72,21 +72,32 @@ export async function findObligation(
   return row ?? null
 }
 
-function checkAcknowledgeable({ title, status, dueOn }: ObligationRow, seenDueOn: string): void {
-  if (status !== 'open' || dueOn === null)
+/** The due date it is worked to. @throws ServiceError `conflict` where the person saw another. */
+function dueOfRunning(obligation: ObligationRow, seenDueOn: string): string {
+  const { title, dueOn } = obligation
+  const due = runningDue(obligation)
+  if (!due)
     throw new ServiceError(
       'conflict',
       `"${title}" is not running any more: nothing to acknowledge.`,
     )
-  if (dueOn !== seenDueOn)
-    throw new ServiceError(
-      'conflict',
-      `The due date of "${title}" is now ${formatDate(dueOn)}. Look at it again before you acknowledge.`,
-    )
+  if (seenDueOn === due.dueOn || seenDueOn === dueOn) return due.dueOn
+  throw new ServiceError(
+    'conflict',
+    `The due date of "${title}" is now ${formatDate(due.dueOn)}. Look at it again before you acknowledge.`,
+  )
 }
 
-function checkNextDate(ctx: Context, { dueOn, zone }: ObligationRow, untilOn: string): void {
-  const range = nextDateRange(dueOn!, localOf(ctx.now.toISOString(), zone).on)
+/** The date an open obligation is worked to; null where it is not running. */
+export function runningDue(
+  obligation: ObligationRow,
+): { dueOn: string; dueAt: string | null } | null {
+  if (obligation.status !== 'open') return null
+  return workingDue({ ...obligation, dueAt: obligation.dueAt?.toISOString() ?? null })
+}
+
+function checkNextDate(ctx: Context, zone: string, dueOn: string, untilOn: string): void {
+  const range = nextDateRange(dueOn, localOf(ctx.now.toISOString(), zone).on)
   if (untilOn >= range.from && untilOn <= range.to) return
   const message = `The next date is ${formatDate(untilOn)}; allowed is ${formatDate(range.from)} to ${formatDate(range.to)}.`
   throw invalid([{ path: 'untilOn', message }])

@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, inArray, isNotNull, sql } from 'drizzle-orm'
+import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm'
 import type { Tx } from '@/db/client'
 import {
   acknowledgements,
@@ -14,7 +14,7 @@ import { calendarRevisions, calendars, organizations } from '@/db/schema/organiz
 import { people } from '@/db/schema/people'
 import { businessCalendar, type BusinessCalendar } from '@/lib/domain/clocks/calendar'
 import type { Role } from '@/lib/domain/access'
-import { obligationKey } from '@/lib/domain/notices'
+import { obligationKey, workingDue } from '@/lib/domain/obligations'
 
 export interface SweepPerson {
   id: string
@@ -48,7 +48,7 @@ export interface Sweep {
 
 /** Reads what is open, who hears of it, whose days count and what the outbox holds already. */
 export async function readSweep(tx: Tx): Promise<Sweep> {
-  const open = withoutCovered((await readOpen(tx)).map(datedOf))
+  const open = withoutCovered((await readOpen(tx)).flatMap(datedOf))
   return {
     obligations: open,
     people: await readPeople(tx),
@@ -78,6 +78,7 @@ function readOpen(tx: Tx) {
       startBy: obligations.startBy,
       dueOn: obligations.dueOn,
       dueAt: obligations.dueAt,
+      statedDueOn: obligations.statedDueOn,
       zone: obligations.zone,
       source: obligations.source,
       projectName: projects.name,
@@ -87,11 +88,12 @@ function readOpen(tx: Tx) {
     .leftJoin(applications, eq(applications.id, obligations.applicationId))
     .leftJoin(projects, eq(projects.id, applications.projectId))
     .leftJoin(applicationStates, eq(applicationStates.applicationId, obligations.applicationId))
-    .where(and(eq(obligations.status, 'open'), isNotNull(obligations.dueOn)))
+    .where(eq(obligations.status, 'open'))
 }
 
-function datedOf(row: OpenRow): OpenObligation {
-  return { ...row, dueOn: row.dueOn!, dueAt: row.dueAt?.toISOString() ?? null }
+function datedOf(row: OpenRow): OpenObligation[] {
+  const due = workingDue({ ...row, dueAt: row.dueAt?.toISOString() ?? null })
+  return due ? [{ ...row, ...due }] : []
 }
 
 /** A step whose own obligations are open is told by them; both would say the same thing twice. */

@@ -1,11 +1,7 @@
 import type { Tx } from '@/db/client'
-import {
-  isOurs,
-  businessDaysLeft,
-  obligationKey,
-  rungsDue,
-  type DueRung,
-} from '@/lib/domain/notices'
+import { isOurs, rungsDue, type DueRung } from '@/lib/domain/notices'
+import { obligationKey } from '@/lib/domain/obligations'
+import { businessDaysTo } from '@/lib/domain/clocks/standing'
 import { federalCalendar } from '@/lib/domain/clocks/library-calendars'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import { routes } from '@/lib/routes'
@@ -130,7 +126,7 @@ function bodyOf(ctx: Context, sweep: Sweep, candidate: Candidate, secret: string
     closesAtHour: dueAt !== null && localOf(dueAt, zone).on === dueOn,
     zone,
     today,
-    businessDaysLeft: businessDaysLeft(dueOn, today, calendarOf(sweep, obligation)),
+    businessDaysLeft: businessDaysTo(calendarOf(sweep, obligation), today, dueOn),
     provisional: obligation.provisional,
     consequence: consequence.say,
     firstAction: consequence.first ?? null,
