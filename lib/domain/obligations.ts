@@ -1,0 +1,59 @@
+import { addDays, daysBetween, type CivilDate } from '@/lib/domain/clocks/civil-date'
+import { instantOf, localOf } from '@/lib/domain/clocks/zoned'
+
+/** What notices, assignments and acknowledgments read of an obligation. */
+
+/** The key an obligation's notices hang on: stable while the procedure is computed anew. */
+export function obligationKey(of: {
+  subjectKind: string
+  subjectId: string
+  step: string
+  instance: number
+  obligation: string
+}): string {
+  return [of.subjectKind, of.subjectId, of.step, of.instance, of.obligation].join('/')
+}
+
+/** What an obligation's key names. @throws RangeError for any other text. */
+export function obligationOfKey(key: string) {
+  const [subjectKind, subjectId, step, instance, obligation] = key.split('/')
+  if (
+    !subjectKind ||
+    !subjectId ||
+    !step ||
+    !/^\d+$/.test(instance ?? '') ||
+    obligation === undefined
+  )
+    throw new RangeError(`Found "${key}"; the key of an obligation is needed.`)
+  return { subjectKind, subjectId, step, instance: Number(instance), obligation }
+}
+
+interface DueDates {
+  dueOn: CivilDate | null
+  dueAt: string | null
+  /** The date the other side's letter names, where it names one. */
+  statedDueOn: CivilDate | null
+  zone: string
+}
+
+/**
+ * The date to work to: the earlier of the counted and the stated one, at the same closing hour.
+ * Null where there is neither.
+ */
+export function workingDue(of: DueDates): { dueOn: CivilDate; dueAt: string | null } | null {
+  const { dueOn, dueAt, statedDueOn, zone } = of
+  if (!statedDueOn || (dueOn && dueOn <= statedDueOn)) return dueOn ? { dueOn, dueAt } : null
+  if (!dueOn || !dueAt) return { dueOn: statedDueOn, dueAt: null }
+  const closes = localOf(dueAt, zone)
+  const on = addDays(statedDueOn, daysBetween(dueOn, closes.on))
+  return { dueOn: statedDueOn, dueAt: instantOf(on, closes.time.slice(0, 5), zone) }
+}
+
+/** The days a next date may lie in: after today, to the due date, or 30 days on once it is past. */
+export function nextDateRange(
+  dueOn: CivilDate,
+  today: CivilDate,
+): { from: CivilDate; to: CivilDate } {
+  const from = addDays(today, 1)
+  return { from, to: dueOn > today ? dueOn : addDays(today, 30) }
+}
