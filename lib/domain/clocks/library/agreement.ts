@@ -1,5 +1,7 @@
-import type { Expr, Loop, Step, StepRef } from '@/lib/domain/clocks/procedure'
+import { underTheAgreement } from '@/lib/domain/clocks/library/at-any-time'
 import { noticeDuty, sources, stepWith, withdrawn } from '@/lib/domain/clocks/library/step-of'
+import { testingToOperation } from '@/lib/domain/clocks/library/testing'
+import type { Expr, Loop, Roll, Step, StepRef } from '@/lib/domain/clocks/procedure'
 
 const sgip = sources('Pro forma SGIP')
 const sgia = sources('Pro forma SGIA')
@@ -15,27 +17,50 @@ interface AgreementOptions {
   tendered: StepRef[]
   /** When the utility builds something, so that security and its work are needed. */
   construction: Expr
+  /** Business days of notice before the witness test; 5 in the pro forma. */
+  testNoticeDays?: number
+  /** Whether a deadline in calendar days rolls off a closed day. */
+  calendarRoll?: Roll
 }
 
-/** Agreement, construction, testing and final accounting: SG-70 to SG-79. */
-export function agreementToOperation({ tendered, construction }: AgreementOptions): Step[] {
+/** Agreement, construction, testing and final accounting: SG-70 to SG-81. */
+export function agreementToOperation(options: AgreementOptions): Step[] {
+  const roll = options.calendarRoll ? { roll: options.calendarRoll } : {}
   return [
-    stepWith({
-      key: 'sign',
-      title: 'Sign and return the agreement',
-      short: 'Agreement signed',
-      stage: 'Agreement',
-      party: 'applicant',
-      start: { mode: 'any', of: tendered },
-      clocks: [{ length: 30, unit: 'business_day' }],
-      outcomes: [
-        { key: 'signed', title: 'Signed and returned' },
-        { key: 'unsigned_filing', title: 'Asked to file it unsigned' },
-      ],
-      onMiss: withdrawn('Sign, or ask for the unsigned filing, before the hour closes.'),
-      evidence: 'Signed agreement and proof of delivery',
-      source: sgip.memory('SG-70', '4.8'),
-    }),
+    signStep(options.tendered),
+    ...constructionSteps(options.construction),
+    ...testingToOperation(options.testNoticeDays ?? 5),
+    ...accounting(options.construction, roll),
+    ...underTheAgreement(roll),
+  ]
+}
+
+function signStep(tendered: StepRef[]): Step {
+  return stepWith({
+    key: 'sign',
+    title: 'Sign and return the agreement',
+    short: 'Agreement signed',
+    stage: 'Agreement',
+    party: 'applicant',
+    start: { mode: 'any', of: tendered },
+    clocks: [{ length: 30, unit: 'business_day' }],
+    outcomes: [
+      { key: 'signed', title: 'Signed and returned' },
+      { key: 'unsigned_filing', title: 'Asked to file it unsigned' },
+    ],
+    onMiss: withdrawn('Sign, or ask for the unsigned filing, before the hour closes.'),
+    evidence: 'Signed agreement and proof of delivery',
+    source: sgip.memory(
+      'SG-70',
+      '4.8',
+      'high',
+      'SG-81, SGIA 3.2, 3.3: the term is 10 years or longer; we may end it on 20 business days of notice.',
+    ),
+  })
+}
+
+function constructionSteps(construction: Expr): Step[] {
+  return [
     stepWith({
       key: 'security',
       title: 'Post security',
@@ -92,100 +117,11 @@ export function agreementToOperation({ tendered, construction }: AgreementOption
       outcomes: [{ key: 'complete', title: 'Mechanically complete' }],
       source: sgia.memory('SG-71', '6.2'),
     }),
-    stepWith({
-      key: 'test_notice',
-      title: 'Give notice of the witness test',
-      short: 'Test notice',
-      stage: 'Testing',
-      party: 'applicant',
-      owner: 'liaison',
-      start: {
-        mode: 'any',
-        of: [{ step: 'sign' }, { step: 'witness_test', instance: 'previous' }],
-      },
-      clocks: [
-        {
-          from: { step: 'witness_test', date: 'scheduled' },
-          length: 5,
-          unit: 'business_day',
-          direction: 'before',
-        },
-      ],
-      outcomes: [{ key: 'given', title: 'Notice given' }],
-      onMiss: {
-        effect: 'duty',
-        say: 'The test moves by the days lost.',
-        first: 'Give the notice now and name the new day.',
-      },
-      source: sgip.memory('SG-75', '4.4; SGIA 2.1.1'),
-    }),
-    stepWith({
-      key: 'witness_test',
-      title: 'Witness test',
-      stage: 'Testing',
-      party: 'both',
-      owner: 'engineer',
-      start: { mode: 'all', of: [{ step: 'test_notice' }] },
-      clocks: [
-        { from: { step: 'witness_test', date: 'scheduled' }, length: 0, unit: 'calendar_day' },
-      ],
-      outcomes: [
-        { key: 'passed', title: 'Passed' },
-        { key: 'failed', title: 'Failed, to be repeated' },
-      ],
-      onMiss: {
-        effect: 'duty',
-        say: 'The test is to be booked anew.',
-        first: 'Agree on a new day.',
-      },
-      evidence: 'Test report',
-      source: sgia.memory('SG-76', '2.1.1, 2.1.2'),
-    }),
-    stepWith({
-      key: 'insurance',
-      title: 'Show proof of insurance',
-      short: 'Insurance',
-      stage: 'Testing',
-      party: 'applicant',
-      start: { mode: 'all', of: [{ step: 'sign' }] },
-      clocks: [
-        {
-          from: { step: 'operation', date: 'scheduled' },
-          length: 10,
-          unit: 'business_day',
-          direction: 'before',
-        },
-      ],
-      outcomes: [{ key: 'shown', title: 'Proof given' }],
-      onMiss: {
-        effect: 'duty',
-        say: 'No parallel operation before it is shown.',
-        first: 'Send the certificate.',
-      },
-      source: sgia.memory('SG-79', '8.1'),
-    }),
-    stepWith({
-      key: 'authorization',
-      title: 'Authorize parallel operation',
-      short: 'Permission',
-      stage: 'Testing',
-      party: 'operator',
-      start: { mode: 'all', of: [{ step: 'witness_test', outcome: ['passed'] }] },
-      clocks: [],
-      outcomes: [{ key: 'authorized', title: 'Authorized in writing' }],
-      onMiss: noticeDuty,
-      source: sgia.memory('SG-77', '2.2', 'high', 'No number; not to be withheld without reason.'),
-    }),
-    stepWith({
-      key: 'operation',
-      title: 'Commercial operation',
-      short: 'COD',
-      stage: 'Operation',
-      party: 'applicant',
-      start: { mode: 'all', of: [{ step: 'authorization' }] },
-      outcomes: [{ key: 'operating', title: 'In operation' }],
-      source: sgia.memory('SG-77', '2.2'),
-    }),
+  ]
+}
+
+function accounting(construction: Expr, roll: { roll?: Roll }): Step[] {
+  return [
     stepWith({
       key: 'final_accounting',
       title: 'Final accounting',
@@ -202,6 +138,23 @@ export function agreementToOperation({ tendered, construction }: AgreementOption
         'high',
         'Counted here from operation, the latest date on which construction is complete.',
       ),
+    }),
+    stepWith({
+      key: 'final_payment',
+      title: 'Pay or refund the balance',
+      short: 'Balance settled',
+      stage: 'Operation',
+      party: 'both',
+      needs: construction,
+      start: { mode: 'all', of: [{ step: 'final_accounting' }] },
+      clocks: [{ length: 30, unit: 'calendar_day', ...roll }],
+      outcomes: [{ key: 'settled', title: 'Paid or refunded' }],
+      onMiss: {
+        effect: 'duty',
+        say: 'The balance stays owed.',
+        first: 'Pay it, or ask for the refund in writing.',
+      },
+      source: sgia.memory('SG-74', '6.1.2'),
     }),
   ]
 }

@@ -1,7 +1,8 @@
 import { agreementToOperation, retestLoop } from '@/lib/domain/clocks/library/agreement'
+import { accountSteps, objections } from '@/lib/domain/clocks/library/at-any-time'
 import { deficiencyLoop, smallGeneratorEntry } from '@/lib/domain/clocks/library/entry'
-import { noticeDuty, sources, stepWith } from '@/lib/domain/clocks/library/step-of'
-import type { Expr, Loop, ProcedureBody, Step } from '@/lib/domain/clocks/procedure'
+import { sources, stepWith } from '@/lib/domain/clocks/library/step-of'
+import type { Expr, Loop, ProcedureBody, Step, StepRef } from '@/lib/domain/clocks/procedure'
 
 const sgip = sources('Pro forma SGIP')
 const failed: Expr = { outcome: 'initial_review', in: ['fail'] }
@@ -238,51 +239,17 @@ const supplementalReview = (depositMinor?: number): Step[] => [
   }),
 ]
 
-const supplementalAccount: Step[] = [
-  stepWith({
-    key: 'supplemental_account',
-    title: 'Account of the supplemental review',
-    short: 'Account',
-    stage: 'Supplemental review',
-    party: 'operator',
-    kind: 'anytime',
-    outcomes: [
-      { key: 'invoice', title: 'Invoice above the deposit' },
-      { key: 'refund', title: 'Deposit above the cost' },
-    ],
-    source: sgip.adapted('SG-31', '2.4.3'),
-  }),
-  stepWith({
-    key: 'supplemental_invoice',
-    title: 'Pay the review cost above the deposit',
-    short: 'Invoice paid',
-    stage: 'Supplemental review',
-    party: 'applicant',
-    needs: { outcome: 'supplemental_account', in: ['invoice'] },
-    start: { mode: 'all', of: [{ step: 'supplemental_account', outcome: ['invoice'] }] },
-    clocks: [{ length: 20, unit: 'business_day' }],
-    outcomes: [{ key: 'paid', title: 'Paid or disputed' }],
-    onMiss: {
-      effect: 'withdrawn_on_notice',
-      say: 'Default.',
-      first: 'Pay, or dispute the invoice in writing.',
-    },
-    source: sgip.adapted('SG-31', '2.4.3'),
-  }),
-  stepWith({
-    key: 'supplemental_refund',
-    title: 'Refund the excess deposit',
-    short: 'Refund',
-    stage: 'Supplemental review',
-    party: 'operator',
-    needs: { outcome: 'supplemental_account', in: ['refund'] },
-    start: { mode: 'all', of: [{ step: 'supplemental_account', outcome: ['refund'] }] },
-    clocks: [{ length: 20, unit: 'business_day' }],
-    outcomes: [{ key: 'refunded', title: 'Refunded, without interest' }],
-    onMiss: noticeDuty,
-    source: sgip.adapted('SG-32', '2.4.3'),
-  }),
-]
+const supplementalAccount: Step[] = accountSteps({
+  key: 'supplemental',
+  title: 'supplemental review',
+  stage: 'Supplemental review',
+  clock: { length: 20, unit: 'business_day' },
+  source: sgip.adapted(
+    'SG-31',
+    '2.4.3',
+    'SG-32: the refund has the same clock. Counted from receipt of the invoice, or from the end of a dispute about it.',
+  ),
+})
 
 const studyTrack = stepWith({
   key: 'to_study',
@@ -308,45 +275,60 @@ interface FastTrackOptions {
   supplementalDepositMinor?: number
 }
 
+export const fastTrackStages = [
+  'Request',
+  'Screens',
+  'Customer options',
+  'Supplemental review',
+  'Study process',
+  'Agreement',
+  'Construction',
+  'Testing',
+  'Operation',
+]
+
+export const fastTrackLoops: Loop[] = [deficiencyLoop, screensLoop, retestLoop]
+
+/** From the complete request to the agreement, or to the study process: SG-20 to SG-37. */
+export function screensToAgreement(options: FastTrackOptions = {}): Step[] {
+  return [
+    ...initialReview,
+    ...customerOptions,
+    ...supplementalReview(options.supplementalDepositMinor),
+    ...supplementalAccount,
+    studyTrack,
+  ]
+}
+
+/** What follows a fast track: where its agreement comes from and when the utility builds. */
+export const afterFastTrack = {
+  tendered: [
+    { step: 'agreement_screens' },
+    { step: 'agreement_modifications' },
+    { step: 'agreement_supplemental' },
+  ] satisfies StepRef[],
+  construction: {
+    any: [
+      { outcome: 'supplemental_review', in: ['pass_minor'] },
+      { outcome: 'accept_modifications', in: ['agreed'] },
+    ],
+  } satisfies Expr,
+}
+
 /** The federal small-generator fast track: SG-04 to SG-37, then agreement and testing. */
 export function federalFastTrack(options: FastTrackOptions = {}): ProcedureBody {
   return {
     key: 'federal_fast_track',
     title: 'Small generator, fast track',
-    stages: [
-      'Request',
-      'Screens',
-      'Customer options',
-      'Supplemental review',
-      'Study process',
-      'Agreement',
-      'Construction',
-      'Testing',
-      'Operation',
-    ],
+    stages: fastTrackStages,
     filedStep: 'file',
     operationStep: 'operation',
-    loops: [deficiencyLoop, screensLoop, retestLoop],
+    loops: fastTrackLoops,
     steps: [
       ...smallGeneratorEntry({ title: 'Fast track fee, not refundable', amountMinor: 50_000 }),
-      ...initialReview,
-      ...customerOptions,
-      ...supplementalReview(options.supplementalDepositMinor),
-      ...supplementalAccount,
-      studyTrack,
-      ...agreementToOperation({
-        tendered: [
-          { step: 'agreement_screens' },
-          { step: 'agreement_modifications' },
-          { step: 'agreement_supplemental' },
-        ],
-        construction: {
-          any: [
-            { outcome: 'supplemental_review', in: ['pass_minor'] },
-            { outcome: 'accept_modifications', in: ['agreed'] },
-          ],
-        },
-      }),
+      ...screensToAgreement(options),
+      ...agreementToOperation(afterFastTrack),
+      ...objections(),
     ],
   }
 }

@@ -1,0 +1,17 @@
+import { federalFastTrack } from '@/lib/domain/clocks/library/fast-track'
+import { stateLevelTwo } from '@/lib/domain/clocks/library/level-two'
+import { federalStudyProcess } from '@/lib/domain/clocks/library/study-process'
+import type { ProcedureBody } from '@/lib/domain/clocks/procedure'
+
+export interface LibraryProcedure {
+  key: string
+  title: string
+  body: ProcedureBody
+}
+
+/** The procedures shipped with the product, each to be checked against the filed tariff. */
+export const libraryProcedures: LibraryProcedure[] = [
+  federalFastTrack(),
+  federalStudyProcess(),
+  stateLevelTwo(),
+].map((body) => ({ key: body.key, title: body.title, body }))
