@@ -87,8 +87,8 @@ describe.skipIf(absent)(`twenty instants from 1980 to 2030 ${MISSING_NOTE}`, () 
       temperature: row.temp_c,
       deltaT: row.delta_t_s,
     })
-    expect(Math.abs(sun.apparentZenithDeg - other.zenith)).toBeLessThan(1e-6)
-    expect(azimuthGap(sun.azimuthDeg, other.azimuth, other.zenith)).toBeLessThan(1e-6)
+    expect(Math.abs(sun.apparentZenithDeg - other!.zenith)).toBeLessThan(1e-6)
+    expect(azimuthGap(sun.azimuthDeg, other!.azimuth, other!.zenith)).toBeLessThan(1e-6)
   })
 })
 
