@@ -23,9 +23,10 @@ export interface Palette {
   mono: string
 }
 
+/** Pages load the mono face under the name of its variable in the layout, documents under its own. */
 const families = {
   sans: 'Archivo, Arial, sans-serif',
-  mono: "'Chivo Mono', 'Liberation Mono', monospace",
+  mono: "chivoMono, 'Chivo Mono', 'Liberation Mono', monospace",
 }
 
 export const lightPalette: Palette = {
