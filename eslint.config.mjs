@@ -72,7 +72,10 @@ const config = [
     },
   },
   // `use…` in a test file is a set-up function of the suite, not a hook.
-  { files: ['tests/**'], rules: { 'react-hooks/rules-of-hooks': 'off' } },
+  {
+    files: ['tests/**'],
+    rules: { 'react-hooks/rules-of-hooks': 'off', 'react/jsx-key': 'off' },
+  },
   ...walls,
   pure,
 ]

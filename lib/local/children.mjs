@@ -74,7 +74,7 @@ function spawnChild(name, args, env, show) {
 }
 
 /** The end of a log, for the person who has to find out why a child ended. */
-export function lastLines(file, count = 20) {
+export function lastLines(file, count = 40) {
   return readFileSync(file, 'utf8').trimEnd().split('\n').slice(-count).join('\n')
 }
 

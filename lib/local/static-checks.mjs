@@ -1,9 +1,13 @@
 import { run } from './children.mjs'
 import { complain, say } from './say.mjs'
 
+const prettier = ['node_modules/prettier/bin/prettier.cjs', '--check', '--log-level', 'warn']
+const eslint = ['node_modules/eslint/bin/eslint.js', '--max-warnings', '0']
+const cache = (name) => ['--cache', '--cache-location', `.local/cache/${name}`]
+
 const checks = {
-  format: ['node_modules/prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', '.'],
-  lint: ['node_modules/eslint/bin/eslint.js', '--max-warnings', '0', '.'],
+  format: [...prettier, ...cache('prettier'), '.'],
+  lint: [...eslint, ...cache('eslint'), '.'],
   types: ['node_modules/typescript/bin/tsc', '--noEmit', '-p', 'tsconfig.json'],
 }
 
