@@ -140,6 +140,8 @@ export const applicationViewSchema = z.object({
   project: z.object({ id: z.string(), name: z.string(), town: z.string().nullable() }),
   entity: z.object({ id: z.string(), name: z.string() }).nullable(),
   operator: organizationBrief,
+  /** The operator's desk that runs this request. */
+  desk: z.string().nullable(),
   others: z.array(organizationBrief.extend({ role: z.string() })),
   procedure: z.object({
     key: z.string(),

@@ -31,7 +31,7 @@ export async function readApplication(ctx: Context, id: string): Promise<Applica
     project: { id: head.project.id, name: head.project.name, town: head.project.town },
     entity: head.entity && { id: head.entity.id, name: head.entity.name },
     operator: brief(parties.operator),
-    others: await othersOf(ctx, id),
+    ...(await organizationsOf(ctx, id)),
     procedure: {
       key: head.procedure.key,
       title: head.revision.body.title,
@@ -82,15 +82,25 @@ function brief(organization: {
   return { id, name, shortName, zone, closesAt }
 }
 
-async function othersOf(ctx: Context, id: string): Promise<ApplicationView['others']> {
+async function organizationsOf(
+  ctx: Context,
+  id: string,
+): Promise<Pick<ApplicationView, 'desk' | 'others'>> {
   const rows = await ctx.db
-    .select({ role: applicationOrganizations.role, organization: organizations })
+    .select({
+      role: applicationOrganizations.role,
+      desk: applicationOrganizations.desk,
+      organization: organizations,
+    })
     .from(applicationOrganizations)
     .innerJoin(organizations, eq(organizations.id, applicationOrganizations.organizationId))
     .where(eq(applicationOrganizations.applicationId, id))
-  return rows
-    .filter((row) => row.role !== 'operator')
-    .map((row) => ({ ...brief(row.organization), role: row.role }))
+  return {
+    desk: rows.find((row) => row.role === 'operator')?.desk ?? null,
+    others: rows
+      .filter((row) => row.role !== 'operator')
+      .map((row) => ({ ...brief(row.organization), role: row.role })),
+  }
 }
 
 async function factViews(ctx: Context, id: string, body: ProcedureBody): Promise<FactView[]> {
