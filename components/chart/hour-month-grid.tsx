@@ -19,6 +19,7 @@ interface HourMonthGridProps {
 const LETTERS = ['J', 'F', 'M', 'A', 'M', 'J', 'J', 'A', 'S', 'O', 'N', 'D']
 const NAMES = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec']
 const LEFT = 46
+const TOP = 8
 const FOOT = 54
 const DENSEST = 2.8
 const WIDEST = 15
@@ -33,7 +34,7 @@ export function HourMonthGrid(props: HourMonthGridProps) {
   const { kwhByHourAndMonth: cells, title, width, height, palette } = props
   const [from, to] = shownHours(cells)
   const cellWidth = (width - LEFT - 2) / 12
-  const cellHeight = (height - FOOT - 8) / (to - from + 1)
+  const cellHeight = (height - FOOT - TOP) / (to - from + 1)
   const most = Math.max(0, ...cells.flat())
   const rows = cells.slice(from, to + 1)
   return (
@@ -43,39 +44,9 @@ export function HourMonthGrid(props: HourMonthGridProps) {
         stroke={palette.rule}
         strokeWidth={1}
       />
-      {rows.flatMap((row, r) =>
-        row.map((kwh, m) =>
-          kwh <= 0 || most === 0 ? null : (
-            <path
-              key={`${r}-${m}`}
-              d={hatchRect(
-                LEFT + m * cellWidth,
-                8 + r * cellHeight,
-                cellWidth,
-                cellHeight,
-                spacingFor(kwh / most),
-              )}
-              stroke={palette.copper}
-              strokeWidth={1}
-              fill="none"
-            />
-          ),
-        ),
-      )}
+      <Cells rows={rows} most={most} width={cellWidth} height={cellHeight} palette={palette} />
       <Hours from={from} to={to} cellHeight={cellHeight} palette={palette} />
-      {LETTERS.map((letter, m) => (
-        <Label
-          key={m}
-          x={LEFT + (m + 0.5) * cellWidth}
-          y={height - FOOT + 15}
-          text={letter}
-          face="sans400"
-          size={12}
-          fill={palette.ink2}
-          palette={palette}
-          anchor="middle"
-        />
-      ))}
+      <Months y={height - FOOT + 15} cellWidth={cellWidth} palette={palette} />
       <Key most={most} y={height - 22} {...props} />
     </Sheet>
   )
@@ -88,13 +59,57 @@ function shownHours(cells: readonly (readonly number[])[]): [number, number] {
 }
 
 function gridPath(rows: number, cellWidth: number, cellHeight: number): string {
-  const [right, bottom] = [px(LEFT + 12 * cellWidth), px(8 + rows * cellHeight)]
+  const [right, bottom] = [px(LEFT + 12 * cellWidth), px(TOP + rows * cellHeight)]
   const across = Array.from(
     { length: rows + 1 },
-    (_, i) => `M${LEFT} ${px(8 + i * cellHeight)} H${right}`,
+    (_, i) => `M${LEFT} ${px(TOP + i * cellHeight)} H${right}`,
   )
-  const down = Array.from({ length: 13 }, (_, i) => `M${px(LEFT + i * cellWidth)} 8 V${bottom}`)
+  const down = Array.from(
+    { length: 13 },
+    (_, i) => `M${px(LEFT + i * cellWidth)} ${TOP} V${bottom}`,
+  )
   return [...across, ...down].join(' ')
+}
+
+interface CellsProps {
+  rows: readonly (readonly number[])[]
+  most: number
+  width: number
+  height: number
+  palette: Palette
+}
+
+function Cells({ rows, most, width, height, palette }: CellsProps) {
+  const hatches = rows.flatMap((row, r) =>
+    row.flatMap((kwh, m) => {
+      if (kwh <= 0) return []
+      const [x, y] = [LEFT + m * width, TOP + r * height]
+      return [hatchRect(x, y, width, height, spacingFor(kwh / most))]
+    }),
+  )
+  return <path d={hatches.join(' ')} stroke={palette.copper} strokeWidth={1} fill="none" />
+}
+
+interface MonthsProps {
+  y: number
+  cellWidth: number
+  palette: Palette
+}
+
+function Months({ y, cellWidth, palette }: MonthsProps) {
+  return LETTERS.map((letter, m) => (
+    <Label
+      key={m}
+      x={LEFT + (m + 0.5) * cellWidth}
+      y={y}
+      text={letter}
+      face="sans400"
+      size={12}
+      fill={palette.ink2}
+      palette={palette}
+      anchor="middle"
+    />
+  ))
 }
 
 interface HoursProps {
@@ -113,7 +128,7 @@ function Hours({ from, to, cellHeight, palette }: HoursProps) {
       <Label
         key={hour}
         x={LEFT - 7}
-        y={8 + (hour - from - 0.5) * cellHeight + 4}
+        y={TOP + (hour - from - 0.5) * cellHeight + 4}
         text={`${hour}:00`}
         face="sans400"
         size={12}

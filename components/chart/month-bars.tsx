@@ -26,20 +26,9 @@ const SIZE = 11
 
 /** Energy at the POI by month, with what was clipped hatched on top. */
 export function MonthBars({ months, width, height, palette, metrics }: MonthBarsProps) {
-  const most = Math.max(1, ...months.map((m) => m.exportKwh + m.clippedKwh))
-  const unit = most >= 10_000_000 ? { name: 'GWh', kwh: 1e6 } : { name: 'MWh', kwh: 1e3 }
-  const ticks = niceTicks(most / unit.kwh, 4)
-  const left = axisRoom(
-    ticks.map((v) => tickFigure(v, ticks)),
-    metrics,
-  )
-  const plot = { x: left, y: 38, width: width - left - 6, height: height - 38 - 26 }
-  const pitch = plot.width / Math.max(1, months.length)
-  const y = linear(0, (ticks.at(-1) ?? 1) * unit.kwh, plot.y + plot.height, plot.y)
-  const narrow = pitch < 30
-  const nameOf = (month: number) => NAMES[month - 1] ?? String(month)
-  const short = (month: number) => (narrow ? nameOf(month).slice(0, 1) : nameOf(month))
-  const figures = months.map((m) => figure(m.exportKwh / unit.kwh, unit.name === 'GWh' ? 1 : 0))
+  const { plot, pitch, unit, ticks, y } = scaleOf(months, width, height, metrics)
+  const short = (month: number) => (pitch < 30 ? nameOf(month).slice(0, 1) : nameOf(month))
+  const figures = months.map((m) => figure(m.exportKwh / unit.kwh, unit.digits))
   const widest = Math.max(0, ...figures.map((text) => textWidth(text, 'mono400', SIZE, metrics)))
   return (
     <Sheet
@@ -50,7 +39,7 @@ export function MonthBars({ months, width, height, palette, metrics }: MonthBars
     >
       <Frame
         plot={plot}
-        xTicks={months.map((m, i) => ({ at: left + (i + 0.5) * pitch, text: short(m.month) }))}
+        xTicks={months.map((m, i) => ({ at: plot.x + (i + 0.5) * pitch, text: short(m.month) }))}
         yTicks={ticks.map((v) => ({ at: y(v * unit.kwh), text: tickFigure(v, ticks) }))}
         yTitle={`${unit.name}, clipped hatched`}
         palette={palette}
@@ -60,7 +49,7 @@ export function MonthBars({ months, width, height, palette, metrics }: MonthBars
         <MonthBar
           key={month.month}
           month={month}
-          x={left + (i + 0.2) * pitch}
+          x={plot.x + (i + 0.2) * pitch}
           width={pitch * 0.6}
           y={y}
           text={widest + 4 <= pitch ? (figures[i] ?? '') : ''}
@@ -69,6 +58,24 @@ export function MonthBars({ months, width, height, palette, metrics }: MonthBars
       ))}
     </Sheet>
   )
+}
+
+function nameOf(month: number): string {
+  return NAMES[month - 1] ?? String(month)
+}
+
+function scaleOf(months: readonly MonthEnergy[], width: number, height: number, metrics: Metrics) {
+  const most = Math.max(1, ...months.map((m) => m.exportKwh + m.clippedKwh))
+  const large = most >= 10_000_000
+  const unit = large ? { name: 'GWh', kwh: 1e6, digits: 1 } : { name: 'MWh', kwh: 1e3, digits: 0 }
+  const ticks = niceTicks(most / unit.kwh, 4)
+  const left = axisRoom(
+    ticks.map((v) => tickFigure(v, ticks)),
+    metrics,
+  )
+  const plot = { x: left, y: 38, width: width - left - 6, height: height - 38 - 26 }
+  const y = linear(0, (ticks.at(-1) ?? 1) * unit.kwh, plot.y + plot.height, plot.y)
+  return { plot, pitch: plot.width / Math.max(1, months.length), unit, ticks, y }
 }
 
 function describeMonth(name: string, month: MonthEnergy): string {

@@ -23,10 +23,10 @@ export interface Palette {
   mono: string
 }
 
-/** Pages load the mono face under the name of its variable in the layout, documents under its own. */
+/** The font's own name first: it is what PNG are set in. Pages load it under the layout's variable. */
 const families = {
   sans: 'Archivo, Arial, sans-serif',
-  mono: "chivoMono, 'Chivo Mono', 'Liberation Mono', monospace",
+  mono: "'Chivo Mono', chivoMono, 'Liberation Mono', monospace",
 }
 
 export const lightPalette: Palette = {

@@ -31,44 +31,31 @@ const limits = [
   { kw: 48_000, label: '48.0 MW export limit', clips: true },
 ]
 
-function drawings(palette: Palette, width: number): [string, ReactElement][] {
+function drawings(palette: Palette, width: number): Record<string, ReactElement> {
   const common = { palette, metrics, width }
+  const chart = { ...common, height: 240 }
   const model = sampleModel()
   const at = { ratio: 1.3, lostFraction: 0.025 }
-  return [
-    ['mark', <Mark palette={palette} />],
-    ['small line', <StepLineSmall steps={model.steps} palette={palette} />],
-    ['large line', <StepLineLarge model={model} {...common} width={Math.max(600, width)} />],
-    ['tall line', <StepLineTall model={model} {...common} />],
-    ['tick', <DimensionTick label="7 BD" tone="soon" palette={palette} metrics={metrics} />],
-    ['one-line', <OneLine elements={sampleElements()} {...common} />],
-    ['loss chain', <LossChain places={samplePlaces()} {...common} />],
-    [
-      'clipping',
-      <ClippingCurve points={ratios} at={at} ratioName="DC/AC" height={240} {...common} />,
-    ],
-    [
-      'duration',
-      <DurationCurve
-        points={hours}
-        limits={limits}
-        clippedKwh={8e5}
-        clippedHours={400}
-        height={240}
-        {...common}
-      />,
-    ],
-    ['grid', <HourMonthGrid kwhByHourAndMonth={cells} title="Clipped" height={300} {...common} />],
-    ['bars', <MonthBars months={months} height={240} {...common} />],
-  ]
+  const clipped = { clippedKwh: 8e5, clippedHours: 400 }
+  return {
+    mark: <Mark palette={palette} />,
+    'small line': <StepLineSmall steps={model.steps} palette={palette} />,
+    'large line': <StepLineLarge model={model} {...common} width={Math.max(600, width)} />,
+    'tall line': <StepLineTall model={model} {...common} />,
+    tick: <DimensionTick label="7 BD" tone="soon" palette={palette} metrics={metrics} />,
+    'one-line': <OneLine elements={sampleElements()} {...common} />,
+    'loss chain': <LossChain places={samplePlaces()} {...common} />,
+    clipping: <ClippingCurve points={ratios} at={at} ratioName="DC/AC" {...chart} />,
+    duration: <DurationCurve points={hours} limits={limits} {...clipped} {...chart} />,
+    grid: <HourMonthGrid kwhByHourAndMonth={cells} title="Clipped" {...chart} />,
+    bars: <MonthBars months={months} {...chart} />,
+  }
 }
 
-const names = drawings(lightPalette, 340).map(([name]) => name)
+const names = Object.keys(drawings(lightPalette, 340))
 
 function markupOf(name: string, palette: Palette, width: number): string {
-  const found = drawings(palette, width).find(([each]) => each === name)
-  if (found === undefined) throw new Error(`no drawing named ${name}`)
-  return renderToStaticMarkup(found[1])
+  return renderToStaticMarkup(drawings(palette, width)[name])
 }
 
 describe.each(names)('the drawing "%s"', (name) => {
