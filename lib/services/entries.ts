@@ -1,7 +1,7 @@
 import { and, eq, lt, or, sql, type SQL } from 'drizzle-orm'
 import type { Tx } from '@/db/client'
 import { entries, entryApplications, factEvidence } from '@/db/schema/correspondence'
-import { uuid } from '@/lib/schemas/common'
+import { usualVisibility } from '@/lib/domain/correspondence'
 import {
   entryFilter,
   type Entry,
@@ -15,8 +15,9 @@ import { checkEntry, type CheckedEntry } from '@/lib/services/entry-checks'
 import { concerns, holdsWords, isLatest, readEntries } from '@/lib/services/entry-reading'
 import { invalid, notFound, ServiceError, type FieldError } from '@/lib/services/errors'
 import { recordFactInside } from '@/lib/services/facts'
-import { linkFiles } from '@/lib/services/files'
+import { linkFiles, linkRevisedFiles } from '@/lib/services/files'
 import { hashOfInput } from '@/lib/services/input-hash'
+import { isUuid } from '@/lib/services/uuid'
 
 /**
  * Records correspondence and, in the same transaction, the events it proves for each application;
@@ -27,6 +28,7 @@ import { hashOfInput } from '@/lib/services/input-hash'
 export async function recordEntry(ctx: Context, input: EntryInput): Promise<Entry> {
   authorize(ctx, 'entry.record')
   if (input.facts.length > 0) authorize(ctx, 'fact.record')
+  if (input.attachments.some((one) => one.restrictedTo)) authorize(ctx, 'file.restrict')
   const inputSha256 = hashOfInput(input)
   try {
     await ctx.db.transaction(async (tx) => {
@@ -64,7 +66,6 @@ async function insertEntry(
   { at, zone, answersRoot }: CheckedEntry,
   inputSha256: string,
 ): Promise<boolean> {
-  const byDefault = input.channel === 'call' ? 'internal' : 'shareable'
   const added = await tx
     .insert(entries)
     .values({
@@ -74,7 +75,7 @@ async function insertEntry(
       zone,
       channel: input.channel,
       direction: input.direction,
-      visibility: input.visibility ?? byDefault,
+      visibility: input.visibility ?? usualVisibility(input.channel),
       organizationId: input.organizationId,
       parties: input.parties,
       subject: input.subject,
@@ -113,11 +114,10 @@ async function linkAll(ctx: Context, tx: Tx, input: EntryInput): Promise<void> {
     }),
   )
   const place = { subjectKind: 'entry' as const, subjectId: input.id }
-  await linkFiles(
-    ctx,
-    tx,
-    input.attachments.map((one) => ({ ...place, ...one })),
-  )
+  const links = input.attachments.map((one) => ({ ...place, ...one }))
+  if (!input.revisesId) return linkFiles(ctx, tx, links)
+  const before = { subjectKind: place.subjectKind, subjectId: input.revisesId, nextId: input.id }
+  return linkRevisedFiles(ctx, tx, links, before)
 }
 
 /** Every event's faults are gathered before anything is refused. */
@@ -193,7 +193,7 @@ export async function listEntries(ctx: Context, filter: EntryFilter = {}): Promi
 function isBefore(cursor: string): SQL | undefined {
   const [at = '', id = ''] = cursor.split('_')
   const moment = new Date(at)
-  if (Number.isNaN(moment.getTime()) || !uuid.safeParse(id).success)
+  if (Number.isNaN(moment.getTime()) || !isUuid(id))
     throw invalid([{ path: 'after', message: 'This is no `next` of an earlier answer.' }])
   return or(lt(entries.at, moment), and(eq(entries.at, moment), lt(entries.id, id)))
 }
@@ -201,7 +201,7 @@ function isBefore(cursor: string): SQL | undefined {
 /** One revision of an entry. @throws ServiceError `not_found` */
 export async function getEntry(ctx: Context, id: string): Promise<Entry> {
   authorize(ctx, 'entry.read')
-  if (!uuid.safeParse(id).success) throw notFound('entry')
+  if (!isUuid(id)) throw notFound('entry')
   const [entry] = await readEntries(ctx, eq(entries.id, id), 1)
   if (!entry) throw notFound('entry')
   return entry

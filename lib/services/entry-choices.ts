@@ -6,6 +6,7 @@ import type { EntryChoices } from '@/lib/schemas/entry'
 import { listRecordableSteps } from '@/lib/services/applications'
 import { authorize, type Context } from '@/lib/services/context'
 import { notFound } from '@/lib/services/errors'
+import { isUuid } from '@/lib/services/uuid'
 
 /**
  * What an entry about this application may name: its organizations with their people, further
@@ -14,6 +15,7 @@ import { notFound } from '@/lib/services/errors'
  */
 export async function getEntryChoices(ctx: Context, applicationId: string): Promise<EntryChoices> {
   authorize(ctx, 'entry.read')
+  if (!isUuid(applicationId)) throw notFound('application')
   const parties = await partiesTo(ctx, applicationId)
   const first = parties[0]
   if (!first) throw notFound('application')

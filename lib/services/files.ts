@@ -9,10 +9,10 @@ import { getFileStore } from '@/lib/files/store'
 import { UploadError } from '@/lib/files/upload-error'
 import { entryIsVisible, fileIsOpen, type Action } from '@/lib/domain/access'
 import { attachmentLimitBytes, type FileLink, type UploadedFile } from '@/lib/schemas/file'
-import { uuid } from '@/lib/schemas/common'
 import { recordAudit } from '@/lib/services/audit'
 import { actorId, authorize, type Context } from '@/lib/services/context'
 import { notFound, ServiceError } from '@/lib/services/errors'
+import { isUuid } from '@/lib/services/uuid'
 
 type Link = typeof fileLinks.$inferSelect
 
@@ -118,11 +118,43 @@ export interface NewLink {
 /** Puts files in their place, inside the caller's transaction and after its own checks. */
 export async function linkFiles(ctx: Context, tx: Tx, links: readonly NewLink[]): Promise<void> {
   authorize(ctx, 'file.read')
-  if (links.some((link) => link.restrictedTo)) authorize(ctx, 'file.restrict')
   if (links.length === 0) return
   await tx
     .insert(fileLinks)
     .values(links.map((link) => ({ ...link, recordedAt: ctx.now, recordedBy: actorId(ctx) })))
+}
+
+/**
+ * The same for a later revision of a subject: what was restricted stays restricted, and files
+ * that the actor cannot see stay attached.
+ */
+export async function linkRevisedFiles(
+  ctx: Context,
+  tx: Tx,
+  links: readonly NewLink[],
+  before: { subjectKind: Link['subjectKind']; subjectId: string; nextId: string },
+): Promise<void> {
+  authorize(ctx, 'file.read')
+  const { subjectKind, subjectId, nextId } = before
+  const earlier = await tx
+    .select()
+    .from(fileLinks)
+    .where(and(eq(fileLinks.subjectKind, subjectKind), eq(fileLinks.subjectId, subjectId)))
+  const restricted = earlier.filter((link) => link.restrictedTo !== null)
+  const closed = restricted
+    .filter((link) => !isOpenTo(ctx, link))
+    .map(({ sha256, name, restrictedTo }) => ({
+      subjectKind,
+      subjectId: nextId,
+      sha256,
+      name,
+      restrictedTo: restrictedTo ?? undefined,
+    }))
+  const kept = links.map((link) => {
+    const known = restricted.find((one) => one.sha256 === link.sha256)
+    return { ...link, restrictedTo: link.restrictedTo ?? known?.restrictedTo ?? undefined }
+  })
+  await linkFiles(ctx, tx, [...kept, ...closed])
 }
 
 /** The files of some subjects that are open to the actor, and how many of each are not. */
@@ -159,7 +191,7 @@ export async function listFileLinks(
  */
 export async function downloadFile(ctx: Context, linkId: string): Promise<Response> {
   authorize(ctx, 'file.read')
-  if (!uuid.safeParse(linkId).success) throw notFound('file')
+  if (!isUuid(linkId)) throw notFound('file')
   const [row] = await ctx.db
     .select({ link: fileLinks, type: files.type })
     .from(fileLinks)

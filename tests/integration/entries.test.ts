@@ -252,6 +252,31 @@ describe('a revision', () => {
     })
   })
 
+  it('keeps restricted files restricted, also those that who revises cannot see', async () => {
+    const application = await newApplication()
+    const [mine, theirs] = [await upload(randomBytes(40), 'a'), await upload(randomBytes(40), 'b')]
+    const other = await createSignedPerson(['engineer'])
+    const both = [liaison.actor.id, other.actor.id]
+    const first = await record(
+      call(application, {
+        attachments: [
+          { sha256: mine.sha256, name: 'mine', restrictedTo: [liaison.actor.id] },
+          { sha256: theirs.sha256, name: 'both', restrictedTo: both },
+        ],
+      }),
+    )
+    const second = await record(
+      call(application, {
+        revisesId: first.id,
+        attachments: [{ sha256: theirs.sha256, name: 'both' }],
+      }),
+      other,
+    )
+    expect(second).toMatchObject({ attachments: [{ name: 'both' }], closedAttachments: 1 })
+    const executive = await createSignedPerson(['executive'])
+    expect(await getEntry(executive.ctx(), second.id)).toMatchObject({ closedAttachments: 2 })
+  })
+
   it('keeps the events that the first entry proves', async () => {
     const application = await newApplication()
     const first = await record(call(application, { facts: [filed(application)] }))
