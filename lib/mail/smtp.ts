@@ -1,6 +1,7 @@
 import { Readable } from 'node:stream'
 import { createTransport } from 'nodemailer'
 import MailComposer from 'nodemailer/lib/mail-composer'
+import SmtpPool from 'nodemailer/lib/smtp-pool'
 import type { Delivery, Mailer, OutgoingMessage } from '@/lib/domain/delivery'
 import { failureOf } from '@/lib/mail/failure'
 import { oneAtATime, type Turn } from '@/lib/mail/one-at-a-time'
@@ -12,6 +13,8 @@ export interface SmtpOptions {
   from: string
   connections?: number
 }
+
+type PoolOptions = ConstructorParameters<typeof SmtpPool>[0]
 
 // Together shorter than the lease of a notice, so that no other worker takes it meanwhile.
 const connectMs = 10_000
@@ -27,7 +30,8 @@ const turnMs = 15_000
 export function smtpMailer({ url, from, connections = 5 }: SmtpOptions): Mailer & {
   close(): void
 } {
-  const transport = createTransport({
+  // The pool is made by hand: given a url, createTransport takes nothing else of its options.
+  const pool = new SmtpPool({
     pool: true,
     url,
     maxConnections: connections,
@@ -37,7 +41,8 @@ export function smtpMailer({ url, from, connections = 5 }: SmtpOptions): Mailer 
     greetingTimeout: connectMs,
     socketTimeout: silenceMs,
     dnsTimeout: connectMs,
-  } as Parameters<typeof createTransport>[0])
+  } as PoolOptions)
+  const transport = createTransport(pool)
   const gate = oneAtATime()
 
   async function deliver(message: OutgoingMessage, settle: () => Promise<void>): Promise<Delivery> {
