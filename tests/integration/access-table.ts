@@ -1,0 +1,168 @@
+import type { Action } from '@/lib/domain/access'
+
+/**
+ * What the walk of access-walk.test.ts expects. A handler, page or service function that is not
+ * here fails it: add the line with the action that lib/domain/access.ts knows.
+ */
+
+/** Opens without a session, and why. */
+export interface Open {
+  open: string
+  /** False where the walk cannot call it: a library that needs a running server. */
+  call?: false
+}
+
+export interface Guarded {
+  action: Action
+  /** Sent where the handler reads its input before it asks who may; `{}` unless told. */
+  body?: unknown
+  /** Query of a GET, such as `?by=us`. */
+  query?: string
+}
+
+/** By method and address as its folder says it. Parameters are filled with a UUID nobody has. */
+export const handlers: Record<string, Action | Guarded | Open> = {
+  'GET /api/auth/[...nextauth]': { open: 'sign-in itself', call: false },
+  'POST /api/auth/[...nextauth]': { open: 'sign-in itself', call: false },
+  'GET /api/health': { open: 'asked by whoever watches the deployment; tells no names' },
+  'GET /api/openapi.json': { open: 'the description holds no data' },
+  'POST /api/one-time-links/request': { open: 'who forgot the password has no session' },
+  'POST /api/one-time-links/accept': { open: 'the secret of the link is the authorization' },
+  'POST /api/acknowledgements/by-link': { open: 'the secret of the e-mail is the authorization' },
+
+  'GET /api/people': 'person.read',
+  'POST /api/people': 'person.write',
+  'GET /api/people/[id]': 'person.read',
+  'PATCH /api/people/[id]': 'person.write',
+  'POST /api/people/[id]/invitation': 'person.write',
+  'GET /api/me': 'self.read',
+  'PATCH /api/me': 'self.write',
+  'POST /api/me/password': 'self.write',
+  'GET /api/me/tokens': 'self.read',
+  'POST /api/me/tokens': 'self.write',
+  'DELETE /api/me/tokens/[id]': 'self.write',
+
+  'GET /api/applications': 'application.read',
+  'POST /api/applications': 'application.create',
+  'GET /api/applications/choices': 'procedure.read',
+  'GET /api/applications/[id]': 'application.read',
+  'POST /api/applications/[id]/facts': 'fact.record',
+  'GET /api/applications/[id]/milestones': 'application.read',
+  'GET /api/obligations': 'obligation.read',
+  'POST /api/acknowledgements': 'obligation.acknowledge',
+  'POST /api/assignments': 'obligation.assign',
+  'POST /api/clocks/count': 'clock.count',
+  'GET /api/notices': 'notice.read',
+
+  'GET /api/entries': 'entry.read',
+  'POST /api/entries': 'entry.record',
+  'GET /api/entries/[id]': 'entry.read',
+  'GET /api/entries/replies-owed': 'entry.read',
+  'GET /api/entries/choices': 'entry.read',
+  'POST /api/entries/from-eml': 'entry.record',
+  'POST /api/files': 'file.upload',
+  'GET /api/files/[id]': 'file.read',
+}
+
+/** Pages outside the signed-in part, and why. All others stand in app/(inside). */
+export const openPages: Record<string, string> = {
+  '/sign-in': 'sign-in itself',
+  '/reset': 'who forgot the password has no session',
+  '/reset/[token]': 'the secret of the link is the authorization',
+  '/welcome/[token]': 'the secret of the link is the authorization',
+  '/acknowledge/[secret]': 'the secret of the e-mail is the authorization',
+}
+
+export interface ServiceRule {
+  action: Action
+  /** What follows the context, where the function looks at it before it asks who may. */
+  args: unknown[]
+}
+
+/** Functions of lib/services by file and name, with the action each asks for first. */
+export const services: Record<string, Action | ServiceRule> = {
+  'acknowledgements.acknowledge': 'obligation.acknowledge',
+  'api-tokens.createToken': 'self.write',
+  'api-tokens.listTokens': 'self.read',
+  'api-tokens.revokeToken': 'self.write',
+  'applications.createApplication': 'application.create',
+  'applications.getApplication': 'application.read',
+  'applications.listApplicationChoices': 'procedure.read',
+  'applications.listApplicationNames': 'application.read',
+  'applications.listRecordableSteps': 'application.read',
+  'assignments.assignObligation': 'obligation.assign',
+  'counting.countClock': 'clock.count',
+  'due.listDue': 'obligation.read',
+  'eml.readEml': 'entry.record',
+  'entries.getEntry': 'entry.read',
+  'entries.listEntries': 'entry.read',
+  'entries.listRepliesOwed': 'entry.read',
+  'entries.recordEntry': 'entry.record',
+  'entry-choices.getEntryChoices': 'entry.read',
+  'facts.recomputeApplication': 'job.run',
+  'facts.recordFact': { action: 'fact.record', args: ['id', { kind: 'happened' }] },
+  'facts.recordFactInside': { action: 'fact.record', args: [{}, 'id', { kind: 'happened' }] },
+  'files.downloadFile': 'file.read',
+  'files.findAttachable': 'file.read',
+  'files.keepFile': 'file.upload',
+  'files.linkFiles': 'file.read',
+  'files.linkRevisedFiles': 'file.read',
+  'files.listFileLinks': 'file.read',
+  'files.uploadFile': 'file.upload',
+  'milestones.listMilestones': 'application.read',
+  'notice-list.listNotices': 'notice.read',
+  'notice-send.sendNotices': 'notice.send',
+  'notice-sweep.sweepNotices': 'notice.send',
+  'one-time-links.sendInvitation': 'person.write',
+  'own-account.changeMe': 'self.write',
+  'own-account.changePassword': 'self.write',
+  'own-account.getMe': 'self.read',
+  'people.changePerson': 'person.write',
+  'people.createPersonWithPassword': 'person.write',
+  'people.getPerson': 'person.read',
+  'people.invitePerson': 'person.write',
+  'people.listPeople': 'person.read',
+  'people.resendInvitation': 'person.write',
+  'pipeline.listApplications': 'application.read',
+}
+
+const inside = 'a part of services that have asked already: takes their transaction or rows'
+const before = 'comes before anybody is known'
+const tool = 'a tool of services: reads and writes no subject by itself'
+
+/** Functions that ask nobody, and why. */
+export const unguarded: Record<string, string> = {
+  'acknowledge-links.acknowledgeByLink': 'the secret of the e-mail is the authorization',
+  'acknowledge-links.inspectAcknowledgeLink': 'the secret of the e-mail is the authorization',
+  'acknowledgements.findObligation': inside,
+  'acknowledgements.recordAcknowledgement': inside,
+  'application-reading.readApplication': inside,
+  'audit.recordAudit': tool,
+  'context.actorId': tool,
+  'context.authorize': 'asks itself',
+  'context.personOf': tool,
+  'entry-checks.checkEntry': inside,
+  'entry-reading.readEntries': inside,
+  'entry-reading.rootOf': inside,
+  'fact-rows.factRowsOf': inside,
+  'fact-rows.factsByApplication': inside,
+  'health.getHealth': 'the open health door; tells no names',
+  'item-views.holdersOf': inside,
+  'item-views.obligationRowsOf': inside,
+  'limiter.forgiveTry': before,
+  'limiter.takeTry': before,
+  'notice-sweep-reading.readSweep': inside,
+  'notices.queueNotice': inside,
+  'notices.queueNotices': inside,
+  'one-time-links.acceptLink': 'the secret of the link is the authorization',
+  'one-time-links.inspectLink': 'the secret of the link is the authorization',
+  'one-time-links.requestReset': before,
+  'parties.organizationParties': inside,
+  'parties.partiesOf': inside,
+  'parties.partiesOfOne': inside,
+  'passwords.hashPassword': tool,
+  'passwords.passwordFits': before,
+  'projection.computeSchedule': inside,
+  'projection.rewriteProjection': inside,
+  'sign-in.signIn': before,
+}
