@@ -64,4 +64,9 @@ async function main(): Promise<void> {
   await migrateDatabase(ownerUrl, applicationRoleOf(applicationUrl, ownerUrl))
 }
 
-if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) await main()
+if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
+  await main().catch((error: Error) => {
+    console.error(error.cause instanceof Error ? error.cause.message : error.message)
+    process.exitCode = 1
+  })
+}

@@ -42,21 +42,27 @@ async function agreeOnPassword(database, env) {
   keep({ [mark]: now })
 }
 
-/**
- * Fills an empty database with the demo. A demo that broke off half-way in a database of ours is
- * made anew from nothing. In a database of DATABASE_URL nothing is ever dropped.
- * @returns whether the demo people are there to sign in as
- */
-export async function ensureDemo(database, env) {
+async function ensureDemo(database, env) {
   if (!existsSync(path.join(root, seed))) return false
-  if (database.ours && existsSync(broken(database))) {
-    await recreate(database)
-    await migrate(database)
-  }
   const isNew = (await countPeople(database.ownerUrl, '%')) === 0
   if (isNew) await fill(database, env)
   if ((await countPeople(database.ownerUrl, '%@demo.test')) === 0) return false
   if (isNew) keep({ [passwordMark(database)]: digest(env.DEMO_PASSWORD) })
   else if (database.ours) await agreeOnPassword(database, env)
   return true
+}
+
+/**
+ * Brings the database to the present schema and fills an empty one with the demo. A demo that
+ * broke off half-way in a database of ours is made anew from nothing; in a database of
+ * DATABASE_URL nothing is ever dropped.
+ * @returns whether the demo people are there to sign in as
+ */
+export async function prepareDatabase(database, env) {
+  if (database.ours && existsSync(broken(database))) {
+    await recreate(database)
+    rmSync(broken(database))
+  }
+  await migrate(database)
+  return ensureDemo(database, env)
 }

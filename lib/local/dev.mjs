@@ -2,7 +2,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs'
 import { appEnv } from './app-env.mjs'
 import { nextBin } from './build.mjs'
 import { household } from './children.mjs'
-import { ensureDemo } from './demo.mjs'
+import { prepareDatabase } from './demo.mjs'
 import { welcome } from './demo-people.mjs'
 import { takeLock } from './lock.mjs'
 import { startMail } from './mail.mjs'
@@ -11,7 +11,7 @@ import { localPath } from './paths.mjs'
 import { waitForPort, webPort } from './ports.mjs'
 import { complain, say } from './say.mjs'
 import { appSecrets, demoPassword } from './secrets.mjs'
-import { databaseEnv, migrate, openDatabase, recreate } from './services.mjs'
+import { databaseEnv, openDatabase, recreate } from './services.mjs'
 import { addressOf, startWorkers } from './web.mjs'
 
 const host = process.env.HOST || '127.0.0.1'
@@ -35,11 +35,6 @@ async function prepare() {
   return openDatabase('lineside_dev', { onEnd: house.onEnd })
 }
 
-async function ready(database, env) {
-  await migrate(database)
-  return ensureDemo(database, env)
-}
-
 /** `--services`: database and mail for whoever starts the rest by hand, told in `.local/dev.env`. */
 async function servicesOnly() {
   takeLock('dev-services', (pid) => `Development services are up already (process ${pid}).`)
@@ -50,7 +45,7 @@ async function servicesOnly() {
   const text = lines.map(([name, value]) => `${name}=${value}\n`).join('')
   writeFileSync(envFile(), text, { mode: 0o600 })
   // Services stay up over a broken migration: whoever mends it runs --migrate or --reset beside them.
-  await ready(database, env).catch(complain)
+  await prepareDatabase(database, env).catch(complain)
   say(`Database and mail are up; their addresses are in .local/dev.env. Mail: ${mail.page}`)
 }
 
@@ -58,7 +53,7 @@ async function servicesOnly() {
 async function databaseOnly() {
   const database = await prepare()
   if (has('--reset') && database.ours) await recreate(database)
-  await ready(database, { ...appSecrets(), DEMO_PASSWORD: demoPassword().value })
+  await prepareDatabase(database, { ...appSecrets(), DEMO_PASSWORD: demoPassword().value })
   say('The development database is up to date.')
   await house.end(0)
 }
@@ -70,7 +65,7 @@ async function develop() {
   const database = await prepare()
   const mail = await startMail(house, { remember: true, name: 'dev-mail' })
   const env = appEnv({ database, mail, address: addressOf(host, port) })
-  const seeded = await ready(database, env)
+  const seeded = await prepareDatabase(database, env)
   const args = [nextBin, 'dev', '-H', host, '-p', String(port)]
   const child = house.start('web', args, { env, show: true })
   startWorkers(house, env, { show: true, prefix: 'dev-' })

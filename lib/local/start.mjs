@@ -1,7 +1,7 @@
 import { appEnv } from './app-env.mjs'
 import { ensureBuild } from './build.mjs'
 import { household } from './children.mjs'
-import { ensureDemo } from './demo.mjs'
+import { prepareDatabase } from './demo.mjs'
 import { welcome } from './demo-people.mjs'
 import { takeLock } from './lock.mjs'
 import { startMail } from './mail.mjs'
@@ -9,7 +9,7 @@ import * as packages from './packages.mjs'
 import { webPort } from './ports.mjs'
 import { complain, say } from './say.mjs'
 import { demoPassword } from './secrets.mjs'
-import { migrate, openDatabase } from './services.mjs'
+import { openDatabase } from './services.mjs'
 import { addressOf, startWeb, startWorkers } from './web.mjs'
 
 const house = household('start')
@@ -30,8 +30,7 @@ async function start() {
   const database = await openDatabase('lineside', { onEnd: house.onEnd })
   const mail = await startMail(house, { remember: true })
   const env = appEnv({ database, mail, address: addressOf(host, port) })
-  await migrate(database)
-  const seeded = await ensureDemo(database, env)
+  const seeded = await prepareDatabase(database, env)
   const distDir = await ensureBuild()
   await startWeb(house, { host, port, distDir, env })
   startWorkers(house, env)
