@@ -18,7 +18,8 @@ export interface FactIndex {
   happened(step: string, instance: number): Fact | undefined
   takenOver(step: string, instance: number): Fact | undefined
   obligationFacts(step: string, instance: number, obligation: string): Fact[]
-  booked(step: string): Fact | undefined
+  /** The last day booked for a step, for one round of it or for any. */
+  booked(step: string, instance?: number): Fact | undefined
   stated(step: string, instance: number): Fact | undefined
   extensions(step: string, instance: number): Fact[]
   waived(step: string, instance: number, obligation?: string): Fact | undefined
@@ -52,7 +53,13 @@ export function indexFacts(body: ProcedureBody, all: readonly Fact[]): FactIndex
     happened: (step, instance) => find('happened', step, instance)[0],
     takenOver: (step, instance) => find('taken_over', step, instance).at(-1),
     obligationFacts: (step, instance, obligation) => find('happened', step, instance, obligation),
-    booked: (step) => facts.findLast((fact) => fact.kind === 'scheduled' && fact.step === step),
+    booked: (step, instance) =>
+      facts.findLast(
+        (fact) =>
+          fact.kind === 'scheduled' &&
+          fact.step === step &&
+          (instance === undefined || fact.instance === instance),
+      ),
     stated: (step, instance) => find('stated', step, instance).at(-1),
     extensions: (step, instance) => find('extension', step, instance),
     waived: (step, instance, obligation) => find('waived', step, instance, obligation).at(-1),

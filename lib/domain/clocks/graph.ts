@@ -146,7 +146,8 @@ function compareTerm(terms: Terms, expr: Extract<Expr, { term: string }>): boole
 /** The date a reference gives this round of the step, or why it gives none. */
 export function resolveRef(graph: Graph, ref: StepRef, from: Step, instance: number): Resolved {
   const target = stepOf(graph.body, ref.step)
-  if (ref.date === 'scheduled') return bookedDate(graph, target)
+  if (ref.date === 'scheduled')
+    return bookedDate(graph, target, inRound(graph, from, ref.step) ? instance : undefined)
   const at = targetInstance(graph, ref, from, instance)
   if (at < 1) return { state: 'never' }
   if (target.kind === 'anytime' && !graph.index.happened(ref.step, at)) return { state: 'never' }
@@ -190,10 +191,11 @@ function eventOf(graph: Graph, ref: StepRef, target: Step, node: Node): Resolved
   }
 }
 
-function bookedDate(graph: Graph, target: Step): Resolved {
-  const fact = graph.index.booked(target.key)
+/** The day booked for a round of a step; from outside its loop, the last day booked. */
+function bookedDate(graph: Graph, target: Step, round?: number): Resolved {
+  const fact = graph.index.booked(target.key, round)
   if (!fact?.dueOn) return { state: 'open' }
-  const done = graph.index.happened(target.key, graph.instances(target.key)) !== undefined
+  const done = graph.index.happened(target.key, fact.instance) !== undefined
   return {
     state: 'met',
     on: fact.dueOn,
