@@ -16,7 +16,7 @@ import {
   type DemoOrganization,
   type DemoPerson,
 } from '@/db/demo/organizations'
-import { libraryProcedures } from '@/lib/domain/clocks/library/all'
+import { demoProcedures, procedureOwners } from '@/db/demo/procedures'
 import type { Context } from '@/lib/services/context'
 import { createPersonWithPassword } from '@/lib/services/people'
 
@@ -84,16 +84,13 @@ async function seedOrganizations(
   return made as SeededHouse['organizations']
 }
 
-// The library belongs to nobody; a utility's own procedure names its organization.
-const ownedBy: Record<string, DemoOrganization['key']> = { state_level_two: 'dml' }
-
 async function seedProcedures(
   db: Db,
   seeded: SeededHouse['organizations'],
 ): Promise<Record<string, string>> {
   const ids: Record<string, string> = {}
-  for (const { key, title, body } of libraryProcedures) {
-    const owner = ownedBy[key]
+  for (const { key, title, body } of demoProcedures) {
+    const owner = procedureOwners[key]
     const [procedure] = await db
       .insert(procedures)
       .values({ key, title, organizationId: owner ? seeded[owner].id : null })

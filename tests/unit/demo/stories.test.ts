@@ -6,7 +6,7 @@ import type { DemoProject } from '@/db/demo/story'
 import { businessCalendar } from '@/lib/domain/clocks/calendar'
 import { addDays } from '@/lib/domain/clocks/civil-date'
 import type { Fact } from '@/lib/domain/clocks/facts'
-import { libraryProcedures } from '@/lib/domain/clocks/library/all'
+import { demoProcedures } from '@/db/demo/procedures'
 import { schedule } from '@/lib/domain/clocks/schedule'
 import { businessDaysTo } from '@/lib/domain/clocks/standing'
 import { instantOf } from '@/lib/domain/clocks/zoned'
@@ -55,7 +55,7 @@ function factsOf(project: DemoProject): Fact[] {
 }
 
 function playedOn(project: DemoProject) {
-  const body = libraryProcedures.find((one) => one.key === project.procedure)!.body
+  const body = demoProcedures.find((one) => one.key === project.procedure)!.body
   return schedule(body, { operator: organizationOf(project) }, factsOf(project))
 }
 
@@ -116,6 +116,9 @@ describe('the demo on Tue 1 Dec 2026', () => {
     ['Linnet Hollow', 'test_notice', 1, '2026-12-04'],
     ['Sable Orchard', 'accept_supplemental', 1, '2026-12-08'],
     ['Pike Hill Landing', 'final_accounting', 1, '2026-12-11'],
+    ['Old Mill Ferry', 'completeness', 1, '2026-12-03'],
+    ['Ferris Cut', 'transmission_study', 1, '2026-11-12'],
+    ['Bellweather South', 'facilities_agreement', 1, '2026-12-03'],
   ])('%s: %s, round %i, is due %s', (name, step, instance, dueOn) => {
     const project = demoProjects('2026-12-01').find((one) => one.name === name)!
     const item = playedOn(project).items.find(

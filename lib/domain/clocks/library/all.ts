@@ -1,5 +1,6 @@
 import { federalFastTrack } from '@/lib/domain/clocks/library/fast-track'
 import { stateLevelTwo } from '@/lib/domain/clocks/library/level-two'
+import { outlineProcedure } from '@/lib/domain/clocks/library/outline'
 import { federalStudyProcess } from '@/lib/domain/clocks/library/study-process'
 import type { ProcedureBody } from '@/lib/domain/clocks/procedure'
 
@@ -14,4 +15,5 @@ export const libraryProcedures: LibraryProcedure[] = [
   federalFastTrack(),
   federalStudyProcess(),
   stateLevelTwo(),
+  outlineProcedure(),
 ].map((body) => ({ key: body.key, title: body.title, body }))

@@ -1,4 +1,4 @@
-import { noticeDuty, sources, stepWith, withdrawn } from '@/lib/domain/clocks/library/step-of'
+import { noticeDuty, sources, stepWith } from '@/lib/domain/clocks/library/step-of'
 import type { Expr, Roll, Step } from '@/lib/domain/clocks/procedure'
 
 const sgip = sources('Pro forma SGIP')
