@@ -117,7 +117,7 @@ export interface NewLink {
 
 /** Puts files in their place, inside the caller's transaction and after its own checks. */
 export async function linkFiles(ctx: Context, tx: Tx, links: readonly NewLink[]): Promise<void> {
-  authorize(ctx, 'file.read')
+  authorize(ctx, 'file.upload')
   if (links.length === 0) return
   await tx
     .insert(fileLinks)
@@ -134,7 +134,7 @@ export async function linkRevisedFiles(
   links: readonly NewLink[],
   before: { subjectKind: Link['subjectKind']; subjectId: string; nextId: string },
 ): Promise<void> {
-  authorize(ctx, 'file.read')
+  authorize(ctx, 'file.upload')
   const { subjectKind, subjectId, nextId } = before
   const earlier = await tx
     .select()

@@ -48,7 +48,7 @@ export function EntryRow({ entry, applicationId, now, onReply, onRevise }: Entry
           </p>
         )}
         {onReply && onRevise && (
-          <p data-screen-only className="mt-1 flex gap-3">
+          <p data-screen-only className="mt-1 -ml-1.5 flex gap-3">
             <Button look="quiet" onClick={onReply}>
               Record the answer
             </Button>
@@ -92,7 +92,7 @@ function EntryText({ text }: { text: string }) {
   if (!text) return null
   const isLong = text.length > shortCharacters || text.split('\n').length > 3
   return (
-    <div className="mt-1 max-w-prose">
+    <div className="mt-1 max-w-prose [&>button]:-ml-1.5">
       <p className={`break-words whitespace-pre-line ${isLong && !isWhole ? 'line-clamp-3' : ''}`}>
         {text}
       </p>
