@@ -13,10 +13,10 @@ const looks: Record<ButtonLook, string> = {
 /** Classes shared by a button and a link that looks like one. */
 export function buttonClass(look: ButtonLook, extra?: string): string {
   return clsx(
-    'inline-flex min-h-9 items-center justify-center gap-2 rounded border px-3.5 py-1.5',
+    'inline-flex min-h-9 items-center justify-center gap-2 rounded border py-1.5',
     'text-base leading-tight font-semibold whitespace-nowrap pointer-coarse:min-h-11',
     'disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:cursor-progress aria-disabled:opacity-70',
-    look === 'quiet' && 'px-1.5',
+    look === 'quiet' ? 'px-1.5' : 'px-3.5',
     looks[look],
     look !== 'quiet' && 'no-underline',
     extra,
