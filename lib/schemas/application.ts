@@ -157,6 +157,8 @@ export const applicationViewSchema = z.object({
   todayOn: z.string(),
   items: z.array(itemSchema),
   recordable: z.array(recordableStepSchema),
+  /** Steps that are closed: what a correction of their facts chooses from. */
+  settled: z.array(recordableStepSchema),
   facts: z.array(factViewSchema),
   stranded: z.array(z.object({ factId: z.string(), reason: z.string() })),
 })
@@ -215,6 +217,8 @@ export type PipelineRow = z.infer<typeof pipelineRowSchema>
 export const pipelineSchema = z.object({
   items: z.array(pipelineRowSchema),
   next: z.string().optional(),
+  /** Whoever operates for one of the applications, for the filter; by name. */
+  organizations: z.array(z.object({ id: z.string(), name: z.string() })),
   totals: z.object({
     open: z.number(),
     filed: z.number(),
@@ -230,28 +234,33 @@ export const pipelineFilter = z.object({
   organization: uuid.optional(),
   find: z.string().trim().max(80).optional(),
   sort: z.enum(['next', 'project', 'mwAc', 'operator']).optional(),
+  /** Turns the order around; MWac begins with the largest unless told. */
+  order: z.enum(['asc', 'desc']).optional(),
 })
 export type PipelineFilter = z.infer<typeof pipelineFilter>
 
+/** A project that is not known yet. */
+export const newProjectInput = z.object({
+  name: shortText('The project name', 120),
+  town: shortText('The town', 120).optional(),
+  latitude: z
+    .number('The latitude is a number of degrees, such as 37.25.')
+    .min(-90, 'A latitude lies between -90 and 90.')
+    .max(90, 'A latitude lies between -90 and 90.')
+    .optional(),
+  longitude: z
+    .number('The longitude is a number of degrees, such as -103.5.')
+    .min(-180, 'A longitude lies between -180 and 180.')
+    .max(180, 'A longitude lies between -180 and 180.')
+    .optional(),
+})
+
 export const newApplicationInput = z.object({
   id: uuid,
-  project: z.union([
-    z.object({ id: uuid }),
-    z.object({
-      name: shortText('The project name', 120),
-      town: shortText('The town', 120).optional(),
-      latitude: z
-        .number()
-        .min(-90, 'A latitude lies between -90 and 90.')
-        .max(90, 'A latitude lies between -90 and 90.')
-        .optional(),
-      longitude: z
-        .number()
-        .min(-180, 'A longitude lies between -180 and 180.')
-        .max(180, 'A longitude lies between -180 and 180.')
-        .optional(),
-    }),
-  ]),
+  project: z.union([z.object({ id: uuid }), newProjectInput], {
+    error:
+      'Give the id of a project, or the name of a new one with its town, latitude (-90 to 90) and longitude (-180 to 180) as far as known.',
+  }),
   entityName: shortText('The project company', 160),
   operatorId: uuid,
   desk: shortText('The desk', 80).optional(),
@@ -266,6 +275,25 @@ export const newApplicationInput = z.object({
   openedOn: civilDateSchema.optional(),
 })
 export type NewApplicationInput = z.infer<typeof newApplicationInput>
+
+/** What a new application chooses from. */
+export const applicationChoicesSchema = z.object({
+  organizations: z.array(z.object({ id: z.string(), name: z.string(), zone: z.string() })),
+  procedures: z.array(
+    z.object({
+      revisionId: z.string(),
+      title: z.string(),
+      no: z.number(),
+      /** Null for one of the shipped library, which any organization may follow. */
+      organizationId: z.string().nullable(),
+      key: z.string(),
+      steps: z.number(),
+    }),
+  ),
+  projects: z.array(z.object({ id: z.string(), name: z.string(), town: z.string().nullable() })),
+  entities: z.array(z.object({ id: z.string(), name: z.string() })),
+})
+export type ApplicationChoices = z.infer<typeof applicationChoicesSchema>
 
 export const dueScopes = ['mine', 'ours', 'theirs'] as const
 export const dueFilter = z.object({

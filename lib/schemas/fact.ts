@@ -5,12 +5,20 @@ import { civilDateSchema, instantSchema, shortText, uuid } from '@/lib/schemas/c
 export const termsSchema = z.object({
   requestNo: shortText('The request number', 60).optional(),
   poi: shortText('The point of interconnection', 120).optional(),
-  poiVoltageKv: z.number().positive('The voltage must be above 0 kV.').max(1200).optional(),
+  poiVoltageKv: z
+    .number('The voltage is a number of kV, such as 13.2.')
+    .positive('The voltage must be above 0 kV.')
+    .max(1200, 'The voltage may be at most 1,200 kV.')
+    .optional(),
   requestedMw: z.number().positive('MWac must be above 0.').max(5000).optional(),
   studiedMw: z.number().positive().max(5000).optional(),
   grantedMw: z.number().positive().max(5000).optional(),
   installedMw: z.number().positive().max(5000).optional(),
-  dcMw: z.number().positive('MWdc must be above 0.').max(8000).optional(),
+  dcMw: z
+    .number('MWdc is a number, such as 4.5.')
+    .positive('MWdc must be above 0.')
+    .max(8000, 'MWdc may be at most 8,000.')
+    .optional(),
   technology: shortText('The technology', 60).optional(),
   storageMw: z.number().nonnegative().max(5000).optional(),
   storageMwh: z.number().nonnegative().max(50000).optional(),

@@ -11,6 +11,7 @@ import {
 import { organizations, procedureRevisions, procedures } from '@/db/schema/organizations'
 import type { Tx } from '@/db/client'
 import type {
+  ApplicationChoices,
   ApplicationView,
   NewApplicationInput,
   RecordableStep,
@@ -156,20 +157,6 @@ async function insertApplication(
     subjectId: id,
     after: input,
   })
-}
-
-export interface ApplicationChoices {
-  organizations: { id: string; name: string; zone: string }[]
-  procedures: {
-    revisionId: string
-    title: string
-    no: number
-    organizationId: string | null
-    key: string
-    steps: number
-  }[]
-  projects: { id: string; name: string; town: string | null }[]
-  entities: { id: string; name: string }[]
 }
 
 /** What a new application chooses from: organizations, latest procedure revisions, projects. */

@@ -1,10 +1,11 @@
 import { and, eq, inArray } from 'drizzle-orm'
 import { applications, applicationStates, obligations, projects } from '@/db/schema/applications'
 import { addDays, weekdayOf } from '@/lib/domain/clocks/civil-date'
+import { startStanding, type Standing } from '@/lib/domain/clocks/standing'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import type { Due, DueFilter, DueRow } from '@/lib/schemas/application'
 import { authorize, personOf, type Context } from '@/lib/services/context'
-import { holdersOf, itemView } from '@/lib/services/item-views'
+import { holdersOf, itemView, organizationFor } from '@/lib/services/item-views'
 import { partiesOf } from '@/lib/services/parties'
 
 /** What is owed: by the person, by us, by the utilities; nearest first. */
@@ -53,6 +54,7 @@ async function dueRows(
     .flatMap(({ obligation, project, state }) => {
       const own = parties.get(obligation.applicationId!)!
       const item = itemView(obligation, own, holders, ctx.now)
+      const { calendar } = organizationFor(own, obligation.party)
       const base = {
         ...item,
         applicationId: obligation.applicationId!,
@@ -62,11 +64,14 @@ async function dueRows(
         closesAt: own.operator.closesAt,
       }
       const organizationId = own.operator.id
+      const left = () => startStanding(item.startBy!, item.zone, ctx.now.toISOString(), calendar)
       const due =
-        item.obligation === '' && item.dueAt ? [{ row: dueRow(base, todayOn), organizationId }] : []
+        item.obligation === '' && (item.dueOn ?? item.statedDueOn)
+          ? [{ row: dueRow(base, todayOn), organizationId }]
+          : []
       const start =
         item.startBy && item.obligation !== '' && item.status === 'open'
-          ? [{ row: startRow(base, todayOn), organizationId }]
+          ? [{ row: startRow(base, todayOn, left), organizationId }]
           : []
       return [...due, ...start]
     })
@@ -81,13 +86,10 @@ function dueRow(base: Base, todayOn: string): DueRow {
   return { ...base, rowKind: 'due', on, group: missed ? 'missed' : groupOf(on, todayOn) }
 }
 
-function startRow(base: Base, todayOn: string): DueRow {
-  return {
-    ...base,
-    rowKind: 'start_by',
-    on: base.startBy!,
-    group: base.startBy! < todayOn ? 'missed' : groupOf(base.startBy!, todayOn),
-  }
+/** A late start is no missed clock: it stands first in this week, with the days it is late. */
+function startRow(base: Base, todayOn: string, left: () => Standing): DueRow {
+  const on = base.startBy!
+  return { ...base, rowKind: 'start_by', on, standing: left(), group: groupOf(on, todayOn) }
 }
 
 function earliestOf(a: string | null, b: string | null): string {

@@ -58,13 +58,19 @@ export async function holdersOf(db: Db | Tx, applicationIds: string[]): Promise<
           one.step === row.step &&
           one.instance === row.instance &&
           one.obligation === row.obligation &&
-          one.dueOn === row.dueOn,
+          one.dueOn === earlierOf(row.dueOn, row.statedDueOn),
       )
       if (!found) return null
       const { reason, untilOn, recordedAt } = found.acknowledgement
       return { by: found.name, reason, untilOn, at: recordedAt.toISOString() }
     },
   }
+}
+
+/** An acknowledgment holds for the date that was worked to: the earlier of counted and stated. */
+function earlierOf(a: string | null, b: string | null): string | null {
+  if (!a || !b) return a ?? b
+  return a < b ? a : b
 }
 
 /** An obligation as it stands at `now`. */

@@ -1,7 +1,13 @@
 import { and, asc, eq, inArray } from 'drizzle-orm'
 import { applications, applicationStates, obligations, projects } from '@/db/schema/applications'
 import { localOf } from '@/lib/domain/clocks/zoned'
-import type { ItemView, Pipeline, PipelineFilter, PipelineRow } from '@/lib/schemas/application'
+import type {
+  ItemView,
+  LineItem,
+  Pipeline,
+  PipelineFilter,
+  PipelineRow,
+} from '@/lib/schemas/application'
 import { authorize, type Context } from '@/lib/services/context'
 import { holdersOf, itemView, type ObligationRow } from '@/lib/services/item-views'
 import { partiesOf, type ApplicationParties } from '@/lib/services/parties'
@@ -31,14 +37,15 @@ export async function listApplications(
     const items = (rows.get(head.application.id) ?? []).map((row) =>
       itemView(row, own, holders, ctx.now),
     )
-    return { row: rowOf(ctx, head, own, items), items, operatorId: own.operator.id }
+    return { row: rowOf(ctx, head, own, items), items, operator: own.operator }
   })
-  const shown = all.filter(({ row, operatorId }) => isShown(row, operatorId, filter))
+  const shown = all.filter(({ row, operator }) => isShown(row, operator.id, filter))
   return {
     items: sorted(
       shown.map(({ row }) => row),
-      filter.sort ?? 'next',
+      filter,
     ),
+    organizations: organizationsOf(all.map(({ operator }) => operator)),
     totals: totalsOf(all),
   }
 }
@@ -85,7 +92,7 @@ function rowOf(
     standing,
     stage,
     todayOn: localOf(ctx.now.toISOString(), parties.operator.zone).on,
-    line: items.filter((item) => item.onLine),
+    line: items.filter((item) => item.onLine).map(lineItem),
     next: next && {
       step: next.step,
       instance: next.instance,
@@ -99,6 +106,19 @@ function rowOf(
       party: next.party,
     },
   }
+}
+
+/** Rows of a hundred applications go over the wire: only what the drawing reads. */
+function lineItem(item: ItemView): LineItem {
+  const { step, instance, obligation, title, short, party, kind, onLine } = item
+  const { status, startOn, dueOn, doneOn, doneLate, provisional, standing } = item
+  const drawn = { step, instance, obligation, title, short, party, kind, onLine }
+  return { ...drawn, status, startOn, dueOn, doneOn, doneLate, provisional, standing }
+}
+
+function organizationsOf(operators: { id: string; name: string }[]): Pipeline['organizations'] {
+  const byId = new Map(operators.map(({ id, name }) => [id, { id, name }]))
+  return [...byId.values()].sort((a, b) => a.name.localeCompare(b.name))
 }
 
 /** Ours before theirs, the earliest first; without a dated one, the first that is open. */
@@ -128,20 +148,30 @@ function isShown(row: PipelineRow, operatorId: string, filter: PipelineFilter): 
   )
 }
 
-function sorted(rows: PipelineRow[], by: NonNullable<PipelineFilter['sort']>): PipelineRow[] {
-  const far = '9999'
-  const key = (row: PipelineRow): string => {
-    if (by === 'project') return row.project
-    if (by === 'operator') return row.operator
-    const theirs = row.next?.standing.tone === 'theirs' ? '1' : '0'
-    return row.next?.dueAt
-      ? `${row.next.standing.tone === 'missed' ? '' : theirs}${row.next.dueAt}`
-      : far
-  }
-  if (by === 'mwAc') return [...rows].sort((a, b) => (b.mwAc ?? 0) - (a.mwAc ?? 0))
+function sorted(rows: PipelineRow[], { sort = 'next', order }: PipelineFilter): PipelineRow[] {
+  const turn = (order ?? (sort === 'mwAc' ? 'desc' : 'asc')) === 'asc' ? 1 : -1
   return [...rows].sort(
-    (a, b) => key(a).localeCompare(key(b)) || a.project.localeCompare(b.project),
+    (a, b) => turn * compareBy(sort, a, b) || a.project.localeCompare(b.project),
   )
+}
+
+type SortKey = NonNullable<PipelineFilter['sort']>
+
+function compareBy(sort: SortKey, a: PipelineRow, b: PipelineRow): number {
+  if (sort === 'mwAc') return (a.mwAc ?? 0) - (b.mwAc ?? 0)
+  if (sort === 'next') return compareText(urgency(a), urgency(b))
+  return a[sort].localeCompare(b[sort])
+}
+
+function compareText(a: string, b: string): number {
+  return a < b ? -1 : a > b ? 1 : 0
+}
+
+/** What we missed, then what we owe by its hour, then what they owe, then what has no date. */
+function urgency({ next }: PipelineRow): string {
+  if (!next?.dueAt) return '3'
+  const rank = { missed: '0', theirs: '2' }[next.standing.tone as string] ?? '1'
+  return `${rank}${next.dueAt}`
 }
 
 function totalsOf(all: { row: PipelineRow; items: ItemView[] }[]): Pipeline['totals'] {

@@ -79,6 +79,28 @@ export function standing(item: Standable, nowAt: string, calendar: BusinessCalen
   }
 }
 
+/**
+ * How near the day stands by which a preparation must begin. A late start is near, never missed:
+ * the clock itself still runs.
+ */
+export function startStanding(
+  startBy: CivilDate,
+  zone: string,
+  nowAt: string,
+  calendar: BusinessCalendar,
+): Standing {
+  const today = localOf(nowAt, zone).on
+  const businessDays = businessDaysTo(calendar, today, startBy)
+  const late = startBy < today
+  const left = late
+    ? `${Math.max(1, -businessDays)} BD late`
+    : startBy === today
+      ? 'today'
+      : `${businessDays} BD`
+  const tone = businessDays <= nearBusinessDays ? 'soon' : 'far'
+  return { state: 'running', tone, left, businessDays, closesInMinutes: null }
+}
+
 function settledStanding(item: Standable): Standing | null {
   switch (item.status) {
     case 'done':
