@@ -1,5 +1,6 @@
 import { addDays, daysBetween, type CivilDate } from '@/lib/domain/clocks/civil-date'
 import { instantOf, localOf } from '@/lib/domain/clocks/zoned'
+import { formatDate, formatHour } from '@/lib/domain/format-date'
 
 /** What notices, assignments and acknowledgments read of an obligation. */
 
@@ -56,4 +57,21 @@ export function nextDateRange(
 ): { from: CivilDate; to: CivilDate } {
   const from = addDays(today, 1)
   return { from, to: dueOn > today ? dueOn : addDays(today, 30) }
+}
+
+interface SaidDue {
+  dueOn: CivilDate
+  dueAt: string | null
+  zone: string
+}
+
+/** `Thu 10 Dec 2026, 5 pm MT`. */
+export function sayDue(due: SaidDue): string {
+  return `${formatDate(due.dueOn)}, ${sayClosing(due)}`
+}
+
+/** `5 pm MT`, or `to the end of the day` where it closes with the day. */
+export function sayClosing({ dueOn, dueAt, zone }: SaidDue): string {
+  const closesAtHour = dueAt !== null && localOf(dueAt, zone).on === dueOn
+  return closesAtHour ? formatHour(dueAt, zone) : 'to the end of the day'
 }

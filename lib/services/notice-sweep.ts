@@ -123,7 +123,6 @@ function bodyOf(ctx: Context, sweep: Sweep, candidate: Candidate, secret: string
     isOurs: isOurs(obligation.party),
     dueOn,
     dueAt,
-    closesAtHour: dueAt !== null && localOf(dueAt, zone).on === dueOn,
     zone,
     today,
     businessDaysLeft: businessDaysTo(calendarOf(sweep, obligation), today, dueOn),

@@ -1,6 +1,7 @@
 import type { CivilDate } from '@/lib/domain/clocks/civil-date'
 import type { RungSays } from '@/lib/domain/notices'
-import { formatDate, formatHour } from '@/lib/domain/format-date'
+import { sayClosing, sayDue } from '@/lib/domain/obligations'
+import { formatDate } from '@/lib/domain/format-date'
 import { letter, type Letter, type LetterPart } from '@/templates/notices/_parts'
 
 /** What a notice about a clock says. */
@@ -16,8 +17,6 @@ export interface ClockNotice {
   dueOn: CivilDate
   /** ISO instant; null where no hour is known. */
   dueAt: string | null
-  /** Whether the day closes at an hour, or runs to its end. */
-  closesAtHour: boolean
   zone: string
   today: CivilDate
   /** Business days after today, to the due date; 0 on it, negative once it is past. */
@@ -74,7 +73,7 @@ function nearness(notice: ClockNotice): string {
   if (!notice.isOurs) return today > dueOn ? 'Theirs is late' : 'Theirs is due'
   if (says === 'missed' || today > dueOn) return 'Missed'
   if (says === 'start') return `Start today, due ${formatDate(dueOn)}`
-  if (today === dueOn) return `Due today, ${hourOf(notice)}`
+  if (today === dueOn) return `Due today, ${sayClosing(notice)}`
   return left === 0 ? `Due ${formatDate(dueOn)}` : `Due in ${countWords(left)}`
 }
 
@@ -104,17 +103,9 @@ function cellsOf(notice: ClockNotice): { caption: string; value: string }[] {
     { caption: notice.isOurs ? 'We owe' : 'They owe', value: title },
     { caption: 'Project', value: request },
     ...(organizationName ? [{ caption: 'Utility', value: organizationName }] : []),
-    { caption: 'Due', value: dueWords(notice) },
+    { caption: 'Due', value: sayDue(notice) },
     { caption: 'Left', value: leftWords(notice) },
   ]
-}
-
-function dueWords(notice: ClockNotice): string {
-  return `${formatDate(notice.dueOn)}, ${hourOf(notice)}`
-}
-
-function hourOf({ dueAt, closesAtHour, zone }: ClockNotice): string {
-  return dueAt && closesAtHour ? formatHour(dueAt, zone) : 'to the end of the day'
 }
 
 function leftWords({ businessDaysLeft: left, says, today, dueOn }: ClockNotice): string {
