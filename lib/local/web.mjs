@@ -12,10 +12,11 @@ export function addressOf(host, port) {
 
 /** The two worker processes, each where its entry exists. */
 export function startWorkers(house, env, { show = false, prefix = '' } = {}) {
+  const NODE_ENV = show ? 'development' : 'production'
   for (const name of ['send', 'make']) {
     const entry = `lib/worker/${name}.ts`
     if (!existsSync(path.join(root, entry))) continue
-    house.start(`${prefix}worker-${name}`, ['--import', 'tsx', entry], { env, show })
+    house.start(`${prefix}worker-${name}`, ['--import', 'tsx', entry], { env: { ...env, NODE_ENV }, show })
   }
 }
 
