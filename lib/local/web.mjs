@@ -16,7 +16,10 @@ export function startWorkers(house, env, { show = false, prefix = '' } = {}) {
   for (const name of ['send', 'make']) {
     const entry = `lib/worker/${name}.ts`
     if (!existsSync(path.join(root, entry))) continue
-    house.start(`${prefix}worker-${name}`, ['--import', 'tsx', entry], { env: { ...env, NODE_ENV }, show })
+    house.start(`${prefix}worker-${name}`, ['--import', 'tsx', entry], {
+      env: { ...env, NODE_ENV },
+      show,
+    })
   }
 }
 
