@@ -37,7 +37,7 @@ async function startOf(localPath: string): Promise<{ start: Buffer; isWhole: boo
 
 /** UTF-8 without control characters; the last character may be cut where the sample ends. */
 function isText(start: Buffer, isWhole: boolean): boolean {
-  // eslint-disable-next-line no-control-regex -- control characters are what tells bytes from text
+  // Control characters are what tells bytes from text.
   if (/[\0-\x08\x0e-\x1a\x1c-\x1f]/.test(start.toString('latin1'))) return false
   try {
     new TextDecoder('utf-8', { fatal: true }).decode(start, { stream: !isWhole })

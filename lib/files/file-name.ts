@@ -1,5 +1,5 @@
 const maxCharacters = 180
-// eslint-disable-next-line no-control-regex -- control characters must not reach a name
+// Control characters must not reach a name.
 const unsafe = /[\0-\x1f\x7f-\x9f\u200e\u200f\u202a-\u202e\u2066-\u2069"*:<>?|]/g
 
 /** A name as it may be kept and saved under: no folders, no control or direction characters. */

@@ -1,6 +1,6 @@
 'use client'
 
-import { useState } from 'react'
+import { useRef, useState } from 'react'
 import { readEml } from '@/lib/client/entries'
 import { ProblemError } from '@/lib/client/fetcher'
 import { newId } from '@/lib/client/new-id'
@@ -36,26 +36,32 @@ export function useEntryForm(applicationId: string, choices: EntryChoices, start
   const [draft, setDraft] = useState(() => (startsAt ? fresh(startsAt) : null))
   const [ids, setIds] = useState(makeIds)
   const [note, setNote] = useState<string>()
-  const uploads = useUploads((file) => void lookInside(file))
+  const uploads = useUploads()
+  // Counts the forms, so that an answer that comes late does not fill the next one.
+  const formNo = useRef(0)
 
-  async function lookInside(file: UploadedFile) {
+  async function lookInside(file: UploadedFile, no: number) {
     if (!/\.eml$/i.test(file.name)) return
     try {
       const { sha256, name } = file
       const eml = await readEml({ sha256, name, zone: usualZone })
+      if (formNo.current !== no) return
       uploads.attach(eml.attachments)
       setDraft((before) => before && fillFromEml(before, eml))
-      setNote(
-        eml.recordedAs
-          ? 'This e-mail is recorded already; look before you do it twice.'
-          : undefined,
-      )
+      if (eml.recordedAs) setNote('This e-mail is recorded already; look before you do it twice.')
     } catch (error) {
-      if (error instanceof ProblemError) setNote(`${error.message} It stays attached as a file.`)
+      if (!(error instanceof ProblemError)) throw error
+      if (formNo.current === no) setNote(`${error.message} It stays attached as a file.`)
     }
   }
 
-  function open(next: EntryDraft) {
+  function add(files: readonly File[]) {
+    const no = formNo.current
+    uploads.add(files, (kept) => void lookInside(kept, no))
+  }
+
+  function show(next: EntryDraft | null) {
+    formNo.current += 1
     uploads.clear()
     setIds(makeIds())
     setNote(undefined)
@@ -66,23 +72,19 @@ export function useEntryForm(applicationId: string, choices: EntryChoices, start
     draft,
     ids,
     note,
-    uploads,
+    uploads: { ...uploads, add },
     set: (part: Partial<EntryDraft>) => setDraft((before) => before && { ...before, ...part }),
-    openNew: () => open(fresh()),
-    openReply: (entry: Entry) => open(replyDraft(entry, fresh(), applicationId)),
+    openNew: () => show(fresh()),
+    openReply: (entry: Entry) => show(replyDraft(entry, fresh(), applicationId)),
     openRevision: (entry: Entry) => {
-      open(reviseDraft(entry, applicationId))
+      show(reviseDraft(entry, applicationId))
       uploads.attach(entry.attachments)
     },
     /** Files dropped on the page open the form, or join what is typed already. */
     dropFiles: (files: File[]) => {
-      if (!draft) open({ ...fresh(), channel: 'email', direction: 'in' })
-      uploads.add(files)
+      if (!draft) show({ ...fresh(), channel: 'email', direction: 'in' })
+      add(files)
     },
-    close: () => {
-      uploads.clear()
-      setNote(undefined)
-      setDraft(null)
-    },
+    close: () => show(null),
   }
 }

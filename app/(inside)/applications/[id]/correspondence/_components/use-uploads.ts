@@ -13,7 +13,8 @@ export interface Attachment extends FileInHand {
 
 export interface Uploads {
   files: readonly Attachment[]
-  add: (files: readonly File[]) => void
+  /** `onKept` is told of each file once it is kept. */
+  add: (files: readonly File[], onKept?: (file: UploadedFile) => void) => void
   /** Files that are kept already. */
   attach: (files: readonly UploadedFile[]) => void
   remove: (key: string) => void
@@ -21,7 +22,7 @@ export interface Uploads {
 }
 
 /** Files on their way and kept; each is sent at once and shows its own progress and refusal. */
-export function useUploads(onKept: (file: UploadedFile) => void): Uploads {
+export function useUploads(): Uploads {
   const [files, setFiles] = useState<readonly Attachment[]>([])
   const running = useRef(new Map<string, AbortController>())
 
@@ -29,7 +30,7 @@ export function useUploads(onKept: (file: UploadedFile) => void): Uploads {
     setFiles((before) => before.map((one) => (one.key === key ? { ...one, ...part } : one)))
   }
 
-  async function send(key: string, file: File) {
+  async function send(key: string, file: File, onKept?: (file: UploadedFile) => void) {
     const controller = new AbortController()
     running.current.set(key, controller)
     try {
@@ -38,7 +39,7 @@ export function useUploads(onKept: (file: UploadedFile) => void): Uploads {
         onProgress: (sentBytes) => change(key, { sentBytes: Math.min(sentBytes, file.size) }),
       })
       change(key, { kept, done: true, sentBytes: file.size })
-      onKept(kept)
+      onKept?.(kept)
     } catch (error) {
       if (!controller.signal.aborted) change(key, { error: refusalOf(error) })
     } finally {
@@ -46,13 +47,13 @@ export function useUploads(onKept: (file: UploadedFile) => void): Uploads {
     }
   }
 
-  function add(list: readonly File[]) {
+  function add(list: readonly File[], onKept?: (file: UploadedFile) => void) {
     for (const file of list) {
       const key = newId()
       const error = file.size > attachmentLimitBytes ? tooLarge : undefined
       const one = { key, name: file.name, sizeBytes: file.size, sentBytes: 0, error }
       setFiles((before) => [...before, one])
-      if (!error) void send(key, file)
+      if (!error) void send(key, file, onKept)
     }
   }
 
