@@ -145,6 +145,8 @@ export const subHourlySchema = z.object({
   source: z.string(),
 })
 
+export type CalculationInputs = z.infer<typeof calculationInputsSchema>
+
 export const calculationResultSchema = estimateResult.extend({ subHourly: subHourlySchema })
 export type CalculationResult = z.infer<typeof calculationResultSchema>
 

@@ -5,7 +5,7 @@ import { audit } from '@/db/schema/people'
 import { downloadHeaders } from '@/lib/files/file-name'
 import { keepBytes, type KeptFile } from '@/lib/files/keep-stream'
 import { receiveUpload } from '@/lib/files/receive'
-import { getFileStore } from '@/lib/files/store'
+import { getFileStore, type FileStore } from '@/lib/files/store'
 import { UploadError } from '@/lib/files/upload-error'
 import { entryIsVisible, fileIsOpen, type Action } from '@/lib/domain/access'
 import { attachmentLimitBytes, type FileLink, type UploadedFile } from '@/lib/schemas/file'
@@ -21,6 +21,8 @@ export interface UploadOptions {
   limitBytes?: number
   /** What the sender must be allowed to do; `file.upload` if left out. */
   action?: Action
+  /** Looks at the received bytes before they are kept; what it throws refuses them. */
+  check?: (localPath: string) => Promise<void>
 }
 
 /**
@@ -30,10 +32,10 @@ export interface UploadOptions {
 export async function uploadFile(
   ctx: Context,
   request: Request,
-  { limitBytes = attachmentLimitBytes, action = 'file.upload' }: UploadOptions = {},
+  { limitBytes = attachmentLimitBytes, action = 'file.upload', check }: UploadOptions = {},
 ): Promise<UploadedFile> {
   authorize(ctx, action)
-  const received = await refusing(receiveUpload(request, { limitBytes }))
+  const received = await refusing(receiveUpload(request, { limitBytes, store: checked(check) }))
   await registerFile(ctx, received, received.name)
   return received
 }
@@ -49,6 +51,16 @@ export async function keepFile(
   const kept = await refusing(keepBytes(bytes, { store: getFileStore(), limitBytes }))
   await registerFile(ctx, kept, name)
   return { ...kept, name }
+}
+
+function checked(check: UploadOptions['check']): FileStore {
+  const store = getFileStore()
+  if (!check) return store
+  const keep = async (localPath: string, sha256: string) => {
+    await check(localPath)
+    await store.keep(localPath, sha256)
+  }
+  return { ...store, keep }
 }
 
 async function refusing<T>(work: Promise<T>): Promise<T> {
