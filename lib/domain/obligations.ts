@@ -1,5 +1,6 @@
-import { addDays, daysBetween, type CivilDate } from '@/lib/domain/clocks/civil-date'
-import { instantOf, localOf } from '@/lib/domain/clocks/zoned'
+import { addDays, type CivilDate } from '@/lib/domain/clocks/civil-date'
+import { workingDue as earlierDue } from '@/lib/domain/clocks/working-due'
+import { localOf } from '@/lib/domain/clocks/zoned'
 import { formatDate, formatHour } from '@/lib/domain/format-date'
 
 /** What notices, assignments and acknowledgments read of an obligation. */
@@ -31,23 +32,16 @@ export function obligationOfKey(key: string) {
 
 interface DueDates {
   dueOn: CivilDate | null
+  /** The closing of the day to work to, as `schedule` gives it. */
   dueAt: string | null
   /** The date the other side's letter names, where it names one. */
   statedDueOn: CivilDate | null
-  zone: string
 }
 
-/**
- * The date to work to: the earlier of the counted and the stated one, at the same closing hour.
- * Null where there is neither.
- */
+/** The date to work to: the earlier of the counted and the stated one. Null without either. */
 export function workingDue(of: DueDates): { dueOn: CivilDate; dueAt: string | null } | null {
-  const { dueOn, dueAt, statedDueOn, zone } = of
-  if (!statedDueOn || (dueOn && dueOn <= statedDueOn)) return dueOn ? { dueOn, dueAt } : null
-  if (!dueOn || !dueAt) return { dueOn: statedDueOn, dueAt: null }
-  const closes = localOf(dueAt, zone)
-  const on = addDays(statedDueOn, daysBetween(dueOn, closes.on))
-  return { dueOn: statedDueOn, dueAt: instantOf(on, closes.time.slice(0, 5), zone) }
+  const dueOn = earlierDue(of)
+  return dueOn === null ? null : { dueOn, dueAt: of.dueAt }
 }
 
 /** The days a next date may lie in: after today, to the due date, or 30 days on once it is past. */

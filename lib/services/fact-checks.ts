@@ -64,11 +64,10 @@ function checkStep(input: FactInput, step: Step | undefined, ground: CheckGround
   return errors
 }
 
-/** How many rounds of a step there are; a step that may recur has one more to record. */
+/** How many rounds of a step there are; one that may come any time has one more to record. */
 export function roundsOf(schedule: Schedule, step: Step): number {
   const rounds = schedule.items.filter((item) => item.step === step.key && item.obligation === '')
-  const recurs = step.kind === 'anytime' || step.kind === 'recurring'
-  return Math.max(1, rounds.length + (recurs ? 1 : 0))
+  return Math.max(1, rounds.length + (step.kind === 'anytime' ? 1 : 0))
 }
 
 function checkDates(input: FactInput, ground: CheckGround): FieldError[] {

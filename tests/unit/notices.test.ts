@@ -233,32 +233,18 @@ it('an obligation is found again from its key', () => {
 })
 
 describe('the date to work to', () => {
-  const counted = { dueOn: '2026-12-10', dueAt: '2026-12-11T00:00:00.000Z', zone }
+  const dueAt = '2026-12-09T00:00:00.000Z'
   it.each([
-    ['is the counted one where no other is stated', null, counted.dueOn, counted.dueAt],
-    ['stays the counted one where a later is stated', '2026-12-14', counted.dueOn, counted.dueAt],
-    [
-      'is an earlier stated one, at the same hour',
-      '2026-12-08',
-      '2026-12-08',
-      '2026-12-09T00:00:00.000Z',
-    ],
-  ])('%s', (_, statedDueOn, dueOn, dueAt) => {
-    expect(workingDue({ ...counted, statedDueOn })).toEqual({ dueOn, dueAt })
+    ['is the counted one where no other is stated', '2026-12-10', null, '2026-12-10'],
+    ['stays the counted one where a later is stated', '2026-12-10', '2026-12-14', '2026-12-10'],
+    ['is an earlier stated one', '2026-12-10', '2026-12-08', '2026-12-08'],
+    ['is a stated one where none can be counted', null, '2026-12-08', '2026-12-08'],
+  ])('%s, with the closing that the schedule gave', (_, dueOn, statedDueOn, works) => {
+    expect(workingDue({ dueOn, dueAt, statedDueOn })).toEqual({ dueOn: works, dueAt })
   })
 
-  it('is a stated one where none can be counted', () => {
-    const none = { dueOn: null, dueAt: null, zone }
-    expect(workingDue({ ...none, statedDueOn: '2026-12-08' })).toEqual({
-      dueOn: '2026-12-08',
-      dueAt: null,
-    })
-    expect(workingDue({ ...none, statedDueOn: null })).toBeNull()
-  })
-
-  it('closes at the end of a stated day where the counted one does', () => {
-    const midnight = { ...counted, dueAt: '2026-12-11T07:00:00.000Z', statedDueOn: '2026-12-08' }
-    expect(workingDue(midnight)?.dueAt).toBe('2026-12-09T07:00:00.000Z')
+  it('is none where neither is known', () => {
+    expect(workingDue({ dueOn: null, dueAt: null, statedDueOn: null })).toBeNull()
   })
 })
 

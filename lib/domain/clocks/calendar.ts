@@ -102,8 +102,10 @@ export function holidayOn(rule: HolidayRule, year: number): CivilDate | null {
       const on = civilDate(year, rule.month, rule.day)
       return rule.shift === 'none' ? on : observedOn(on)
     }
-    case 'nth_weekday':
-      return addDays(nthWeekday(year, rule.month, rule.weekday, rule.nth), rule.plusDays ?? 0)
+    case 'nth_weekday': {
+      const on = nthWeekday(year, rule.month, rule.weekday, rule.nth)
+      return on && addDays(on, rule.plusDays ?? 0)
+    }
     case 'last_weekday':
       return lastWeekday(year, rule.month, rule.weekday)
     case 'easter':
@@ -123,10 +125,11 @@ function labelOf(rule: HolidayRule, year: number, on: CivilDate): string {
   return on === civilDate(year, rule.month, rule.day) ? rule.name : `${rule.name}, observed`
 }
 
-function nthWeekday(year: number, month: number, weekday: number, nth: number): CivilDate {
+/** Null where the month has no fifth such weekday. */
+function nthWeekday(year: number, month: number, weekday: number, nth: number): CivilDate | null {
   const first = civilDate(year, month, 1)
-  const offset = (weekday - weekdayOf(first) + 7) % 7
-  return addDays(first, offset + (nth - 1) * 7)
+  const day = 1 + ((weekday - weekdayOf(first) + 7) % 7) + (nth - 1) * 7
+  return day > daysInMonth(year, month) ? null : civilDate(year, month, day)
 }
 
 function lastWeekday(year: number, month: number, weekday: number): CivilDate {

@@ -1,7 +1,6 @@
 import {
   addDays,
   dayNumber,
-  earlier,
   fromDayNumber,
   later,
   type CivilDate,
@@ -9,7 +8,6 @@ import {
 import { businessDayFrom } from '@/lib/domain/clocks/calendar'
 import { count, skippedDays, type CountedDay } from '@/lib/domain/clocks/count'
 import type { DerivationLine } from '@/lib/domain/clocks/derivation'
-import { stopHolding } from '@/lib/domain/clocks/fact-index'
 import type { Fact } from '@/lib/domain/clocks/facts'
 import {
   evaluate,
@@ -18,85 +16,155 @@ import {
   type Graph,
   type Resolved,
 } from '@/lib/domain/clocks/graph'
-import type { ClockRule, Consequence, Step } from '@/lib/domain/clocks/procedure'
+import type { ClockRule, Consequence, Step, StepRef } from '@/lib/domain/clocks/procedure'
 import { sayDate, sayLength } from '@/lib/domain/clocks/say'
 import type { OrganizationRules } from '@/lib/domain/clocks/schedule-types'
+import { stopHolding, type Stop } from '@/lib/domain/clocks/stops'
 
 export interface RunClock {
   dueOn: CivilDate | null
   provisional: boolean
   onMiss: Consequence | null
+  /** The stop that lasts and holds this clock before it ran out. */
+  heldBy: Stop | null
   lines: DerivationLine[]
 }
 
 type Met = Extract<Resolved, { state: 'met' }>
+type Due = Pick<RunClock, 'dueOn' | 'provisional' | 'lines'>
 
-/** The due date of this round of an open step: count, cap, extension. */
-export function runClock(graph: Graph, step: Step, instance: number, start: Met | null): RunClock {
-  const clock = step.clocks.find(
-    (rule) => !rule.when || evaluate(graph, rule.when, step, instance).value === true,
-  )
-  if (!clock) return { dueOn: null, provisional: false, onMiss: null, lines: [] }
+const undated: Due = { dueOn: null, provisional: false, lines: [] }
+
+/**
+ * The due date of this round of an open step: count or date taken over, not before, extension,
+ * never after. `running` is the fact that took the step over as running.
+ */
+export function runClock(
+  graph: Graph,
+  step: Step,
+  instance: number,
+  start: Met | null,
+  running?: Fact,
+): RunClock {
+  const { clock, undecided } = chooseClock(graph, step, instance)
+  const rules = (clock?.calendar && graph.parties[clock.calendar]) || rulesFor(graph.parties, step)
+  const startOn = running?.body.sinceOn ?? start?.on ?? null
+  const stops = stopsHolding(graph, step, clock, startOn)
+  const base = running?.dueOn
+    ? enteredDue(running.dueOn, running.body.sinceOn!, clock, rules, stops)
+    : clock
+      ? countedDue(graph, step, instance, clock, start, rules, stops)
+      : undated
+  const floored = clock ? notBefore(graph, step, instance, clock, base) : base
+  const extended = extendIt(graph, step, instance, floored, rules)
+  const capped = clock ? neverAfter(graph, step, instance, clock, extended) : extended
+  const heldBy =
+    stops.find((stop) => stop.toOn === null && (!capped.dueOn || capped.dueOn >= stop.fromOn)) ??
+    null
+  return {
+    ...capped,
+    provisional: capped.provisional || undecided || heldBy !== null,
+    onMiss: clock?.onMiss ?? null,
+    heldBy,
+  }
+}
+
+/** The first alternative that holds; one before it that is not decided leaves it provisional. */
+function chooseClock(graph: Graph, step: Step, instance: number) {
+  let undecided = false
+  for (const clock of step.clocks) {
+    if (!clock.when) return { clock, undecided }
+    const truth = evaluate(graph, clock.when, step, instance)
+    if (truth.value === true) return { clock, undecided: undecided || truth.provisional }
+    undecided ||= truth.value === null
+  }
+  return { clock: undefined, undecided: false }
+}
+
+/**
+ * The stops that hold a clock begun on a day. One without a scope holds what was running when it
+ * began; a backward count is bound to the date it counts from and never stands still.
+ */
+function stopsHolding(
+  graph: Graph,
+  step: Step,
+  clock: ClockRule | undefined,
+  startOn: CivilDate | null,
+): Stop[] {
+  if (!clock || clock.direction === 'before') return []
+  return graph.index
+    .stops(step.key)
+    .filter((stop) => !stop.withdrawal || stop.toOn !== null)
+    .filter(
+      (stop) => stop.withdrawal || stop.scope !== null || startOn === null || startOn < stop.fromOn,
+    )
+}
+
+function stoppedDay(stops: readonly Stop[]): ((day: number) => string | null) | undefined {
+  const ended = stops.filter((stop) => stop.toOn !== null)
+  if (ended.length === 0) return undefined
+  return (day) => {
+    const stop = stopHolding(ended, fromDayNumber(day))
+    return stop ? `clock stopped (${stop.why})` : null
+  }
+}
+
+function countedDue(
+  graph: Graph,
+  step: Step,
+  instance: number,
+  clock: ClockRule,
+  start: Met | null,
+  rules: OrganizationRules,
+  stops: readonly Stop[],
+): Due {
   const from = clock.from ? resolveRef(graph, clock.from, step, instance) : start
   if (from?.state !== 'met') {
     const text = 'No date yet: the clock counts from a date that is not known.'
-    return {
-      dueOn: null,
-      provisional: false,
-      onMiss: clock.onMiss ?? null,
-      lines: [{ kind: 'note', text }],
-    }
+    return { ...undated, lines: [{ kind: 'note', text }] }
   }
-  const rules = countingRules(graph, step, clock)
-  const counted = countFrom(graph, step, clock, from, rules)
-  const capped = capIt(graph, step, instance, clock, counted.dueOn)
-  const extended = extendIt(graph, step, instance, capped.dueOn, rules)
-  return {
-    dueOn: extended.dueOn,
-    provisional: from.provisional || capped.provisional,
-    onMiss: clock.onMiss ?? null,
-    lines: [
-      ...(clock.from ? from.lines : []),
-      ...counted.lines,
-      ...capped.lines,
-      ...extended.lines,
-    ],
-  }
-}
-
-function countingRules(graph: Graph, step: Step, clock: ClockRule): OrganizationRules {
-  return (clock.calendar && graph.parties[clock.calendar]) || rulesFor(graph.parties, step)
-}
-
-function countFrom(
-  graph: Graph,
-  step: Step,
-  clock: ClockRule,
-  from: Met,
-  rules: OrganizationRules,
-): { dueOn: CivilDate; lines: DerivationLine[] } {
-  const { stops } = graph.index
-  const concerned = stops.filter((stop) => stop.scope === null || stop.scope.includes(step.key))
-  const held = (day: number) => stopHolding(concerned, step.key, fromDayNumber(day))?.why ?? null
-  const openStop = concerned.find((stop) => stop.toOn === null)
-  const start = from.afterHours ? businessDayFrom(rules.calendar, addDays(from.on, 1), 1) : from.on
   const result = count(
     {
-      start,
+      start: from.afterHours ? businessDayFrom(rules.calendar, addDays(from.on, 1), 1) : from.on,
       length: clock.length,
       unit: clock.unit,
       direction: clock.direction,
       roll: clock.roll,
       receipt: rules.receiptRule,
       includeStart: clock.includeStart,
-      stopped:
-        concerned.length === 0 || openStop
-          ? undefined
-          : (day) => (held(day) === null ? null : `clock stopped (${held(day)})`),
+      stopped: stoppedDay(stops),
     },
     rules.calendar,
   )
-  return { dueOn: result.dueOn, lines: countLines(clock, result.dueOn, rules, result.derivation) }
+  return {
+    dueOn: result.dueOn,
+    provisional: from.provisional,
+    lines: [
+      ...(clock.from ? from.lines : []),
+      ...countLines(clock, result.dueOn, rules, result.derivation),
+    ],
+  }
+}
+
+/** The due date entered when a running step was taken over, moved by later stops. */
+function enteredDue(
+  dueOn: CivilDate,
+  sinceOn: CivilDate,
+  clock: ClockRule | undefined,
+  rules: OrganizationRules,
+  stops: readonly Stop[],
+): Due {
+  const stopped = stoppedDay(stops)
+  if (!stopped) return { ...undated, dueOn }
+  const unit = clock?.unit === 'business_day' ? 'business_day' : 'calendar_day'
+  const days = [...Array(Math.max(0, dayNumber(dueOn) - dayNumber(sinceOn))).keys()]
+    .map((offset) => dayNumber(sinceOn) + 1 + offset)
+    .filter((day) => stopped(day) !== null)
+    .filter((day) => unit === 'calendar_day' || rules.calendar.closedOnDay(day) === null)
+  if (days.length === 0) return { ...undated, dueOn }
+  const moved = count({ start: dueOn, length: days.length, unit, stopped }, rules.calendar).dueOn
+  const text = `${sayLength(days.length, unit)} of a stopped clock added: ${sayDate(moved)}.`
+  return { ...undated, dueOn: moved, lines: [{ kind: 'stop', on: moved, text }] }
 }
 
 function countLines(
@@ -106,93 +174,104 @@ function countLines(
   days: CountedDay[],
 ): DerivationLine[] {
   const { weekendDays, named } = skippedDays(days)
-  const way = clock.direction === 'before' ? 'at least' : ''
-  const lines: DerivationLine[] = named.map((day) => ({
-    kind: day.reason.startsWith('clock stopped')
-      ? 'stop'
-      : day.reason.includes('rolls')
-        ? 'roll'
-        : 'skip',
-    on: day.on,
-    text: `${sayDate(day.on)} does not count: ${day.reason}.`,
-  }))
+  const before = clock.direction === 'before'
+  const length = sayLength(clock.length, clock.unit)
+  const words = before ? `At least ${length} before` : length
+  const text = `${words}, calendar of ${rules.name}: ${sayDate(dueOn)}.`
+  const isStop = (day: CountedDay) => day.reason.startsWith('clock stopped')
+  const lines: DerivationLine[] = named
+    .filter((day) => !isStop(day))
+    .map((day) => ({
+      kind: day.reason.includes('rolls') ? 'roll' : 'skip',
+      on: day.on,
+      text: `${sayDate(day.on)} does not count: ${day.reason}.`,
+    }))
+  lines.push(...stopLines(named.filter(isStop)))
   if (weekendDays > 0)
     lines.push({
       kind: 'skip',
       text: `${weekendDays} weekend day${weekendDays === 1 ? '' : 's'} not counted.`,
     })
-  const words = `${way} ${sayLength(clock.length, clock.unit)} ${clock.direction === 'before' ? 'before' : ''}`
-  return [
-    {
-      kind: 'count',
-      on: dueOn,
-      text: `${words.trim().replace(/\s+/g, ' ')}, calendar of ${rules.name}: ${sayDate(dueOn)}.`,
-    },
-    ...lines,
-  ]
+  return [{ kind: 'count', on: dueOn, text }, ...lines]
 }
 
-function capIt(
-  graph: Graph,
-  step: Step,
-  instance: number,
-  clock: ClockRule,
-  dueOn: CivilDate,
-): { dueOn: CivilDate; provisional: boolean; lines: DerivationLine[] } {
-  const result = { dueOn, provisional: false, lines: [] as DerivationLine[] }
-  if (clock.neverAfter) {
-    const cap = resolveRef(graph, clock.neverAfter, step, instance)
-    if (cap.state === 'met' && cap.on < dueOn) {
-      result.dueOn = earlier(dueOn, cap.on)
-      result.provisional = cap.provisional
-      result.lines.push({
-        kind: 'cap',
-        on: cap.on,
-        text: `Earlier of ${sayDate(dueOn)} and ${sayDate(cap.on)}, after which it cannot be done.`,
-      })
-    }
+/** One line for each run of stopped days. */
+function stopLines(days: readonly CountedDay[]): DerivationLine[] {
+  const runs: CountedDay[][] = []
+  for (const day of days) {
+    const run = runs.at(-1)
+    const follows = run && dayNumber(day.on) - dayNumber(run.at(-1)!.on) === 1
+    if (follows && run[0]!.reason === day.reason) run.push(day)
+    else runs.push([day])
   }
-  if (clock.notBefore) {
-    const floor = resolveRef(graph, clock.notBefore, step, instance)
-    if (floor.state === 'met' && floor.on > result.dueOn) {
-      result.dueOn = later(result.dueOn, floor.on)
-      result.provisional ||= floor.provisional
-      result.lines.push({
-        kind: 'cap',
-        on: floor.on,
-        text: `Later of the count and ${sayDate(floor.on)}.`,
-      })
-    }
-  }
-  return result
+  return runs.map((run) => ({
+    kind: 'stop',
+    on: run[0]!.on,
+    text: `${sayDate(run[0]!.on)} to ${sayDate(run.at(-1)!.on)} not counted: ${run[0]!.reason}.`,
+  }))
 }
 
+/** The event of a step, or the date it is due by as long as it has not come. */
+function boundary(graph: Graph, ref: StepRef, step: Step, instance: number): Met | null {
+  const event = resolveRef(graph, ref, step, instance)
+  if (event.state === 'met') return event
+  if (event.state === 'never' || ref.date) return null
+  const due = resolveRef(graph, { ...ref, date: 'due' }, step, instance)
+  return due.state === 'met' ? { ...due, provisional: true } : null
+}
+
+function notBefore(graph: Graph, step: Step, instance: number, clock: ClockRule, base: Due): Due {
+  const floor = clock.notBefore && boundary(graph, clock.notBefore, step, instance)
+  if (!floor || !base.dueOn || floor.on <= base.dueOn) return base
+  const text = `Later of ${sayDate(base.dueOn)} and ${sayDate(floor.on)}.`
+  return {
+    dueOn: floor.on,
+    provisional: base.provisional || floor.provisional,
+    lines: [...base.lines, { kind: 'cap', on: floor.on, text }],
+  }
+}
+
+function neverAfter(graph: Graph, step: Step, instance: number, clock: ClockRule, base: Due): Due {
+  const cap = clock.neverAfter && boundary(graph, clock.neverAfter, step, instance)
+  if (!cap || !base.dueOn || cap.on >= base.dueOn) return base
+  const text = `Earlier of ${sayDate(base.dueOn)} and ${sayDate(cap.on)}, after which it cannot be done.`
+  return {
+    dueOn: cap.on,
+    provisional: base.provisional || cap.provisional,
+    lines: [...base.lines, { kind: 'cap', on: cap.on, text }],
+  }
+}
+
+/** Each extension granted, in order: the later of it and what stood before. */
 function extendIt(
   graph: Graph,
   step: Step,
   instance: number,
-  baseOn: CivilDate,
+  base: Due,
   rules: OrganizationRules,
-): { dueOn: CivilDate; lines: DerivationLine[] } {
-  let dueOn = baseOn
-  const lines: DerivationLine[] = []
+): Due {
+  let dueOn = base.dueOn
+  const lines = [...base.lines]
   for (const fact of graph.index.extensions(step.key, instance)) {
     const decision = fact.body.decision ?? 'granted'
     const toOn = extensionEnd(fact, dueOn, rules)
-    const what = toOn ? ` to ${sayDate(toOn)}` : ''
     lines.push({
       kind: 'extension',
-      text: `Extension${what} ${decision}.`,
+      text: `Extension${toOn ? ` to ${sayDate(toOn)}` : ''} ${decision}.`,
       ...(toOn && { on: toOn }),
     })
-    if (decision === 'granted' && toOn) dueOn = later(dueOn, toOn)
+    if (decision === 'granted' && toOn) dueOn = dueOn ? later(dueOn, toOn) : toOn
   }
-  return { dueOn, lines }
+  return { ...base, dueOn, lines }
 }
 
-function extensionEnd(fact: Fact, baseOn: CivilDate, rules: OrganizationRules): CivilDate | null {
+function extensionEnd(
+  fact: Fact,
+  baseOn: CivilDate | null,
+  rules: OrganizationRules,
+): CivilDate | null {
   if (fact.dueOn) return fact.dueOn
-  if (!fact.body.lengthDays) return null
+  if (!fact.body.lengthDays || !baseOn) return null
   const unit = fact.body.unit ?? 'business_day'
   return count({ start: baseOn, length: fact.body.lengthDays, unit }, rules.calendar).dueOn
 }

@@ -1,63 +1,64 @@
 import { leadBefore } from '@/lib/domain/clocks/clock-run'
 import { later } from '@/lib/domain/clocks/civil-date'
-import { eventDate } from '@/lib/domain/clocks/fact-index'
 import type { Fact } from '@/lib/domain/clocks/facts'
 import { rulesFor, type Graph, type Node } from '@/lib/domain/clocks/graph'
 import type { ObligationRule, Step } from '@/lib/domain/clocks/procedure'
 import { datedEvent, receivedByUtility } from '@/lib/domain/clocks/receipt'
 import { sayDate } from '@/lib/domain/clocks/say'
-import type { ScheduledItem } from '@/lib/domain/clocks/schedule-types'
-import { localOf } from '@/lib/domain/clocks/zoned'
+import type { OrganizationRules, ScheduledItem } from '@/lib/domain/clocks/schedule-types'
+import { eventDate } from '@/lib/domain/clocks/stops'
+import { workingDue } from '@/lib/domain/clocks/working-due'
+import { closingInstant, localOf } from '@/lib/domain/clocks/zoned'
 
 /** Closes a round of a step by its event, by its obligations, or as waived or taken over. */
 export function closeNode(graph: Graph, step: Step, node: Node): void {
-  const fact = graph.index.happened(step.key, node.instance) ?? doneBefore(graph, step, node)
+  const fact = graph.index.event(step.key, node.instance)
   const waived = graph.index.waived(step.key, node.instance)
-  if (fact) return closeBy(graph, step, node, fact)
-  if (waived) {
-    node.status = 'waived'
-    node.onLine = true
-    node.doneOn = eventDate(waived) ?? null
-    node.derivation.push({
-      kind: 'done',
-      text: `Waived${node.doneOn ? ` ${sayDate(node.doneOn)}` : ''}.`,
-    })
-    return
-  }
-  closeByObligations(graph, step, node)
+  if (fact) closeBy(graph, step, node, fact)
+  else if (waived) waive(step, node, waived)
+  else if (step.kind === 'gate') closeByObligations(graph, step, node)
 }
 
-function doneBefore(graph: Graph, step: Step, node: Node): Fact | undefined {
-  const fact = graph.index.takenOver(step.key, node.instance)
-  return fact?.body.sinceOn ? undefined : fact
+/** A waived step counts as its usual, first outcome unless the fact names another. */
+function waive(step: Step, node: Node, waived: Fact): void {
+  node.status = 'waived'
+  node.onLine = true
+  node.outcome = waived.outcome ?? step.outcomes[0]?.key ?? null
+  node.doneOn = eventDate(waived) ?? null
+  const on = node.doneOn ? ` ${sayDate(node.doneOn)}` : ''
+  node.derivation.push({ kind: 'done', text: `Waived${on}.` })
 }
 
 function closeBy(graph: Graph, step: Step, node: Node, fact: Fact): void {
-  const event = datedEvent(
-    fact,
-    step,
-    receivedByUtility(step) ? 'received' : 'sent',
-    rulesFor(graph.parties, step),
-  )
+  const rules = rulesFor(graph.parties, step)
+  const basis = receivedByUtility(step) ? 'received' : 'sent'
+  const event = datedEvent(fact, step, basis, rules)
   const early = node.status === 'waiting'
   node.status = 'done'
   node.onLine = true
-  node.outcome = fact.outcome ?? (step.outcomes.length === 1 ? step.outcomes[0]!.key : null)
+  node.outcome = outcomeOf(step, fact)
   node.doneOn = event?.on ?? null
   node.provisional = false
-  if (fact.kind === 'taken_over')
-    node.derivation.push({ kind: 'done', text: 'Taken over as done.' })
-  else
-    node.derivation.push({
-      kind: 'done',
-      text: `Done${node.doneOn ? ` ${sayDate(node.doneOn)}` : ''}${outcomeWords(step, node)}.`,
-    })
+  const on = node.doneOn ? ` ${sayDate(node.doneOn)}` : ''
+  const text =
+    fact.kind === 'taken_over'
+      ? `Taken over as done${on}.`
+      : `Done${on}${outcomeWords(step, node)}.`
+  node.derivation.push({ kind: 'done', text })
   if (early)
     node.derivation.push({
       kind: 'note',
       text: `Recorded before what it follows${fact.reason ? `: ${fact.reason}` : ''}.`,
     })
-  if (node.doneOn && node.dueOn) judge(node, fact, event?.afterHours ?? false)
+  if (node.doneOn && node.dueOn) judge(step, node, fact, rules)
+}
+
+/** What was taken over without an outcome went the usual way, which is the first. */
+function outcomeOf(step: Step, fact: Fact): string | null {
+  const known = step.outcomes.find((one) => one.key === fact.outcome)
+  if (known) return known.key
+  const usual = fact.kind === 'taken_over' || step.outcomes.length === 1
+  return usual && !fact.outcome ? (step.outcomes[0]?.key ?? null) : null
 }
 
 function outcomeWords(step: Step, node: Node): string {
@@ -66,16 +67,17 @@ function outcomeWords(step: Step, node: Node): string {
 }
 
 /** In time, late, or on the day without an hour, which counts as in time. */
-function judge(node: Node, fact: Fact, afterHours: boolean): void {
+function judge(step: Step, node: Node, fact: Fact, rules: OrganizationRules): void {
+  const { doneOn, dueOn } = node
+  if (!doneOn || !dueOn) return
   const at = fact.receivedAt ?? fact.sentAt
-  const dueOn = node.dueOn!
-  if (node.doneOn! !== dueOn) {
-    node.doneLate = node.doneOn! > dueOn
-    node.hourRecorded = at !== undefined
-    return
-  }
   node.hourRecorded = at !== undefined
-  node.doneLate = at !== undefined && (afterHours || isPast(at, node))
+  node.doneLate = doneOn > dueOn
+  if (doneOn !== dueOn || !receivedByUtility(step) || !rules.closesAt) return
+  if (at !== undefined && localOf(at, rules.zone).on === dueOn) {
+    const closes = closingInstant(dueOn, rules.closesAt, rules.zone)
+    node.doneLate = Date.parse(at) > Date.parse(closes)
+  }
   if (!node.hourRecorded)
     node.derivation.push({
       kind: 'hour',
@@ -83,14 +85,9 @@ function judge(node: Node, fact: Fact, afterHours: boolean): void {
     })
 }
 
-function isPast(at: string, node: Node): boolean {
-  if (!node.dueAt || localOf(at, node.zone).on !== node.dueOn) return false
-  return Date.parse(at) > Date.parse(node.dueAt)
-}
-
 function closeByObligations(graph: Graph, step: Step, node: Node): void {
   const rules = step.obligations ?? []
-  if (rules.length === 0 || node.status === 'waiting') return
+  if (rules.length === 0 || node.status === 'waiting' || node.status === 'not_needed') return
   const doneOn = rules.map((rule) => obligationDone(graph, step, node, rule))
   if (doneOn.some((on) => on === undefined)) return
   const last = doneOn.filter((on): on is string => on !== null && on !== undefined)
@@ -111,11 +108,12 @@ function obligationDone(
 ): string | null | undefined {
   if (graph.index.waived(step.key, node.instance, rule.key)) return null
   const facts = graph.index.obligationFacts(step.key, node.instance, rule.key)
-  const last = facts.at(-1)
-  if (!last) return undefined
-  if (rule.what === 'money' && rule.target && heldOf(facts) < rule.target.amountMinor)
-    return undefined
-  return eventDate(last) ?? null
+  const target = rule.what === 'money' ? rule.target?.amountMinor : undefined
+  const last =
+    target === undefined
+      ? facts.at(-1)
+      : facts.find((_, at) => heldOf(facts.slice(0, at + 1)) >= target)
+  return last && (eventDate(last) ?? null)
 }
 
 function heldOf(facts: readonly Fact[]): number {
@@ -125,6 +123,7 @@ function heldOf(facts: readonly Fact[]): number {
 /** The obligations of a round as items of their own, with start-by dates and money. */
 export function obligationItems(graph: Graph, step: Step, node: Node): ScheduledItem[] {
   if (node.status === 'not_needed') return []
+  const workOn = workingDue(node)
   return (step.obligations ?? []).map((rule) => {
     const { presumed: _presumed, ...base } = node
     const doneOn = obligationDone(graph, step, node, rule)
@@ -141,8 +140,7 @@ export function obligationItems(graph: Graph, step: Step, node: Node): Scheduled
       outcome: null,
       doneOn: doneOn ?? (open ? null : node.doneOn),
       doneLate: null,
-      startBy:
-        node.dueOn && lead ? leadBefore(node.dueOn, lead, rulesFor(graph.parties, step)) : null,
+      startBy: workOn && lead ? leadBefore(workOn, lead, rulesFor(graph.parties, step)) : null,
       moneyTargetMinor: rule.target?.amountMinor ?? null,
       moneyHeldMinor: rule.what === 'money' ? heldOf(facts) : null,
       derivation: node.derivation.filter((line) => line.kind === 'count' || line.kind === 'source'),

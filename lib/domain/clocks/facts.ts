@@ -79,16 +79,18 @@ export interface Fact {
 
 /**
  * The facts in force: corrections take the place (kind and order) of what they correct, and
- * retracted facts are gone. A chain of corrections resolves to its last link.
+ * retracted facts are gone. A chain of corrections resolves to its last link, so retracting a
+ * correction takes the whole statement away, and correcting a retraction brings it back.
  *
  * A correction carries the full corrected content in its own fields; its kind is that of the
- * fact it replaces.
+ * fact it replaces. The order in which the facts are passed does not matter.
  */
 export function effectiveFacts(facts: readonly Fact[]): Fact[] {
   const replacedBy = new Map<string, Fact>()
-  for (const fact of facts) if (fact.replacesId) replacedBy.set(fact.replacesId, fact)
+  const ordered = [...facts].sort((a, b) => a.seq - b.seq || a.id.localeCompare(b.id))
+  for (const fact of ordered) if (fact.replacesId) replacedBy.set(fact.replacesId, fact)
   const result: Fact[] = []
-  for (const fact of [...facts].sort((a, b) => a.seq - b.seq)) {
+  for (const fact of ordered) {
     if (fact.kind === 'correction' || fact.kind === 'retraction') continue
     const last = lastLink(fact, replacedBy)
     if (last.kind === 'retraction') continue

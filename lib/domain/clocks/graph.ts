@@ -1,4 +1,4 @@
-import { later, type CivilDate } from '@/lib/domain/clocks/civil-date'
+import type { CivilDate } from '@/lib/domain/clocks/civil-date'
 import type { DerivationLine } from '@/lib/domain/clocks/derivation'
 import type { Terms } from '@/lib/domain/clocks/facts'
 import type { FactIndex } from '@/lib/domain/clocks/fact-index'
@@ -35,6 +35,8 @@ export type Resolved =
       lines: DerivationLine[]
     }
   | { state: 'open' }
+  /** Done, but nobody recorded when: it lies before the application was taken over. */
+  | { state: 'undated' }
   | { state: 'never' }
 
 export interface Graph {
@@ -43,27 +45,39 @@ export interface Graph {
   parties: Parties
   terms: Terms
   node(step: string, instance: number): Node
-  /** How many rounds of the step there are; one outside loops. */
+  /** How many rounds of the step there are; one outside loops, none of an unrecorded anytime step. */
   instances(step: string): number
 }
 
-/** Whose rules a step is counted by: the organization it names, else the operator. */
-export function rulesFor(parties: Parties, step: Step): OrganizationRules {
+/**
+ * Whose hour, receipt rule and calendar hold for a step: the organization that acts, or the one
+ * that receives what the applicant sends; else the operator.
+ */
+export function rulesFor(parties: Parties, step: Pick<Step, 'party' | 'to'>): OrganizationRules {
   const role = step.party
-  if (role === 'applicant' || role === 'both' || role === 'other') return parties.operator
+  if (role === 'applicant' || role === 'both' || role === 'other')
+    return (step.to && parties[step.to]) ?? parties.operator
   return parties[role] ?? parties.operator
 }
 
+/** Whether a reference from one step to another stays in the same round. */
+function sameRound(graph: Graph, from: Step, step: string): boolean {
+  const loop = loopOf(graph.body, step)
+  if (loop !== undefined) return loop === loopOf(graph.body, from.key)
+  const { kind } = stepOf(graph.body, step)
+  return from.kind === 'recurring' && (kind === 'anytime' || kind === 'recurring')
+}
+
+/** The round a reference means; 0 where there is none yet. */
 function targetInstance(
   graph: Graph,
   ref: { step: string; instance?: string },
   from: Step,
   instance: number,
-) {
+): number {
   if (ref.instance === 'previous') return instance - 1
-  const loop = loopOf(graph.body, ref.step)
-  const same = loop !== undefined && loop === loopOf(graph.body, from.key)
-  return ref.instance === 'latest' || !same ? graph.instances(ref.step) : instance
+  const same = ref.instance !== 'latest' && sameRound(graph, from, ref.step)
+  return same ? instance : graph.instances(ref.step)
 }
 
 /** Whether an expression over outcomes and terms holds for this round of the step. */
@@ -92,27 +106,23 @@ export function evaluate(graph: Graph, expr: Expr, from: Step, instance: number)
   if (at < 1) return { value: false, provisional: false }
   const node = graph.node(ref.step, at)
   const wanted = 'outcome' in expr ? expr.in : null
-  return truthOf(graph, node, wanted, inRound(graph, from, ref.step))
+  return truthOf(graph, node, wanted, sameRound(graph, from, ref.step))
 }
 
 /** Inside one loop a round is decided by itself; only from outside may a further round matter. */
-function inRound(graph: Graph, from: Step, step: string): boolean {
-  const loop = loopOf(graph.body, step)
-  return loop !== undefined && loop === loopOf(graph.body, from.key)
-}
-
-function truthOf(graph: Graph, node: Node, wanted: string[] | null, sameRound: boolean): Truth {
+function truthOf(graph: Graph, node: Node, wanted: string[] | null, inRound: boolean): Truth {
   const provisional = node.provisional || node.presumed
   if (node.status === 'not_needed' || node.status === 'closed') return { value: false, provisional }
-  if (node.status !== 'done' && node.status !== 'waived' && !node.presumed)
-    return { value: null, provisional: false }
-  if (node.status === 'waived') return { value: true, provisional }
-  if (wanted === null || (node.outcome !== null && wanted.includes(node.outcome)))
-    return { value: true, provisional }
-  if (node.presumed || (!sameRound && mayComeAgain(graph, node)))
-    return { value: null, provisional: false }
+  const ended = node.status === 'done' || node.status === 'waived'
+  if (!ended && !node.presumed) return unknown
+  if (wanted === null) return { value: true, provisional }
+  if (node.outcome === null) return unknown
+  if (wanted.includes(node.outcome)) return { value: true, provisional }
+  if (node.presumed || (!inRound && mayComeAgain(graph, node))) return unknown
   return { value: false, provisional }
 }
+
+const unknown: Truth = { value: null, provisional: false }
 
 /** Whether the loop of this step may still bring another round. */
 function mayComeAgain(graph: Graph, node: Node): boolean {
@@ -125,9 +135,10 @@ function mayComeAgain(graph: Graph, node: Node): boolean {
 }
 
 function combine(parts: Truth[], any: boolean): Truth {
-  const decided = parts.find((part) => part.value === any)
-  if (decided) return decided
-  if (parts.some((part) => part.value === null)) return { value: null, provisional: false }
+  const deciding = parts.filter((part) => part.value === any)
+  if (deciding.length > 0)
+    return { value: any, provisional: deciding.every((part) => part.provisional) }
+  if (parts.some((part) => part.value === null)) return unknown
   return { value: !any, provisional: parts.some((part) => part.provisional) }
 }
 
@@ -146,42 +157,38 @@ function compareTerm(terms: Terms, expr: Extract<Expr, { term: string }>): boole
 /** The date a reference gives this round of the step, or why it gives none. */
 export function resolveRef(graph: Graph, ref: StepRef, from: Step, instance: number): Resolved {
   const target = stepOf(graph.body, ref.step)
-  if (ref.date === 'scheduled')
-    return bookedDate(graph, target, inRound(graph, from, ref.step) ? instance : undefined)
   const at = targetInstance(graph, ref, from, instance)
   if (at < 1) return { state: 'never' }
-  if (target.kind === 'anytime' && !graph.index.happened(ref.step, at)) return { state: 'never' }
+  if (ref.date === 'scheduled') return bookedDate(graph, target, at, from)
   const node = graph.node(ref.step, at)
-  if (ref.date === 'due')
-    return node.dueOn
-      ? {
-          state: 'met',
-          on: node.dueOn,
-          afterHours: false,
-          provisional: node.provisional,
-          lines: [startLine(node, node.dueOn, 'due')],
-        }
-      : { state: node.status === 'not_needed' ? 'never' : 'open' }
-  const truth = truthOf(graph, node, ref.outcome ?? null, inRound(graph, from, ref.step))
-  if (truth.value === null) return { state: 'open' }
-  return truth.value ? eventOf(graph, ref, target, node) : { state: 'never' }
+  if (ref.date === 'due') return dueDate(node)
+  const truth = truthOf(graph, node, ref.outcome ?? null, sameRound(graph, from, ref.step))
+  if (truth.value === false) return { state: 'never' }
+  if (truth.value === true) return eventOf(graph, ref, target, node)
+  const sure = ref.outcome === undefined || target.outcomes.length === 1
+  const ahead = node.status === 'open' || node.status === 'waiting' || node.status === 'stopped'
+  return sure && ahead ? bookedDate(graph, target, at, from) : { state: 'open' }
+}
+
+function dueDate(node: Node): Resolved {
+  if (!node.dueOn) return { state: node.status === 'not_needed' ? 'never' : 'open' }
+  return {
+    state: 'met',
+    on: node.dueOn,
+    afterHours: false,
+    provisional: node.provisional,
+    lines: [startLine(node, node.dueOn, 'due')],
+  }
 }
 
 function eventOf(graph: Graph, ref: StepRef, target: Step, node: Node): Resolved {
-  const fact =
-    graph.index.happened(node.step, node.instance) ??
-    graph.index.takenOver(node.step, node.instance)
+  const fact = graph.index.event(node.step, node.instance)
   const rules = rulesFor(graph.parties, target)
   const event = fact && datedEvent(fact, target, ref.date ?? 'received', rules)
   const on = event?.on ?? node.doneOn ?? (node.presumed ? node.dueOn : null)
-  if (!on) return { state: 'open' }
-  const basis = event
-    ? ref.date === 'sent'
-      ? 'sent'
-      : 'received'
-    : node.presumed
-      ? 'presumed'
-      : 'done'
+  if (!on) return { state: node.status === 'done' || node.status === 'waived' ? 'undated' : 'open' }
+  const happened = ref.date === 'sent' ? 'sent' : 'received'
+  const basis = event ? happened : node.presumed ? 'presumed' : 'done'
   return {
     state: 'met',
     on,
@@ -191,23 +198,37 @@ function eventOf(graph: Graph, ref: StepRef, target: Step, node: Node): Resolved
   }
 }
 
-/** The day booked for a round of a step; from outside its loop, the last day booked. */
-function bookedDate(graph: Graph, target: Step, round?: number): Resolved {
-  const fact = graph.index.booked(target.key, round)
-  if (!fact?.dueOn) return { state: 'open' }
-  const done = graph.index.happened(target.key, fact.instance) !== undefined
+/**
+ * The day a step is booked for; once it happened, the day it did, except for its own clock,
+ * which goes on saying what was booked.
+ */
+function bookedDate(graph: Graph, target: Step, instance: number, from: Step): Resolved {
+  const event = graph.index.event(target.key, instance)
+  const rules = rulesFor(graph.parties, target)
+  const happened = event && datedEvent(event, target, 'received', rules)
+  if (happened && from.key !== target.key)
+    return {
+      ...happened,
+      state: 'met',
+      provisional: false,
+      lines: [
+        {
+          kind: 'start',
+          on: happened.on,
+          text: `Starts from: ${target.title}, ${sayDate(happened.on)}.`,
+        },
+        ...happened.lines,
+      ],
+    }
+  const on = graph.index.booked(target.key, instance)?.dueOn
+  if (!on) return { state: 'open' }
+  const text = `${target.title}, booked for ${sayDate(on)}.`
   return {
     state: 'met',
-    on: fact.dueOn,
+    on,
     afterHours: false,
-    provisional: !done,
-    lines: [
-      {
-        kind: 'start',
-        on: fact.dueOn,
-        text: `${target.title}, booked for ${sayDate(fact.dueOn)}.`,
-      },
-    ],
+    provisional: !happened,
+    lines: [{ kind: 'start', on, text }],
   }
 }
 
@@ -227,15 +248,22 @@ export function resolveStart(
   const hasPrevious = rule.of.some((ref) => ref.instance === 'previous')
   const refs = hasPrevious ? inRound : rule.of
   const found = refs.map((ref) => resolveRef(graph, ref, from, instance))
-  const live = found.filter((one) => one.state !== 'never')
-  if (live.length === 0) return { state: 'never' }
-  const met = live.filter((one) => one.state === 'met')
-  if (met.length === 0 || (rule.mode === 'all' && met.length < live.length))
-    return { state: 'open' }
-  const chosen = met.reduce((a, b) => {
-    const bIsLater = later(a.on, b.on) === b.on && a.on !== b.on
-    return (rule.mode === 'all') === bIsLater ? b : a
-  })
+  const needed = found.filter((one) => one.state !== 'never')
+  if (needed.length === 0) return { state: 'never' }
+  const dated = needed.filter((one) => one.state !== 'undated')
+  if (dated.length === 0) return { state: 'undated' }
+  const met = dated.filter((one) => one.state === 'met')
+  const someUndated = rule.mode === 'any' && dated.length < needed.length
+  if (met.length === 0) return { state: someUndated ? 'undated' : 'open' }
+  if (rule.mode === 'all' && met.length < dated.length) return { state: 'open' }
+  const chosen = met.reduce((a, b) => (isLater(a, b) === (rule.mode === 'all') ? b : a))
   const provisional = rule.mode === 'all' ? met.some((one) => one.provisional) : chosen.provisional
   return { ...chosen, provisional }
+}
+
+type Met = Extract<Resolved, { state: 'met' }>
+
+/** Whether the second counts from a later day 0 than the first. */
+function isLater(a: Met, b: Met): boolean {
+  return b.on > a.on || (b.on === a.on && b.afterHours && !a.afterHours)
 }

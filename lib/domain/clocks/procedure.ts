@@ -3,13 +3,20 @@
 export type PartyRole =
   'applicant' | 'operator' | 'wires_owner' | 'affected_system' | 'load_utility' | 'regulator'
 export type StepParty = PartyRole | 'both' | 'other'
+/**
+ * `anytime`: as often as it is recorded, each a numbered round. `recurring`: once for each round
+ * of the anytime step that starts it.
+ */
 export type StepKind = 'normal' | 'window' | 'gate' | 'anytime' | 'recurring'
 export type Unit = 'business_day' | 'calendar_day' | 'month' | 'year'
 export type Direction = 'after' | 'before'
 export type Roll = 'none' | 'next_business_day' | 'previous_business_day'
 /** Which date of a fact a reference reads. */
 export type DateBasis = 'sent' | 'received' | 'due' | 'scheduled'
-/** `same` is the default inside one loop, `latest` everywhere else. */
+/**
+ * `same` is the default inside one loop and from a recurring step to what it follows, `latest`
+ * everywhere else.
+ */
 export type InstanceRef = 'same' | 'latest' | 'previous'
 
 export interface StepRef {
@@ -109,6 +116,8 @@ export interface Step {
   short?: string
   stage: string
   party: StepParty
+  /** Whose hour and receipt rule hold for what the applicant sends; the operator if left out. */
+  to?: PartyRole
   kind: StepKind
   needs?: Expr
   /** Needed only by some outcomes, but drawn ahead as the way a request usually goes. */

@@ -4,7 +4,7 @@ import type { Fact } from '@/lib/domain/clocks/facts'
 import type { DateBasis, Step } from '@/lib/domain/clocks/procedure'
 import { sayDate } from '@/lib/domain/clocks/say'
 import type { OrganizationRules } from '@/lib/domain/clocks/schedule-types'
-import { localOf } from '@/lib/domain/clocks/zoned'
+import { closingInstant, localOf } from '@/lib/domain/clocks/zoned'
 
 export interface DatedEvent {
   on: CivilDate
@@ -72,6 +72,6 @@ function isAfterHours(fact: Fact, step: Step, on: CivilDate, rules: Organization
   const at = fact.receivedAt ?? (fact.receivedOn ? undefined : fact.sentAt)
   if (!at || !rules.closesAt || rules.receiptRule !== 'next_business_day') return false
   if (!receivedByUtility(step)) return false
-  const local = localOf(at, rules.zone)
-  return local.on === on && local.time > `${rules.closesAt}:00`
+  if (localOf(at, rules.zone).on !== on) return false
+  return Date.parse(at) > Date.parse(closingInstant(on, rules.closesAt, rules.zone))
 }

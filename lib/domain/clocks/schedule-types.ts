@@ -60,7 +60,10 @@ export interface ScheduledItem {
   outcome: string | null
   startOn: CivilDate | null
   dueOn: CivilDate | null
-  /** ISO instant at which the day of `dueOn` closes for the receiving party. */
+  /**
+   * ISO instant at which the day to work to closes for the receiving party: the earlier of
+   * `dueOn` and `statedDueOn`.
+   */
   dueAt: string | null
   zone: string
   statedDueOn: CivilDate | null

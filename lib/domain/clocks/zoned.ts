@@ -9,7 +9,8 @@ export function localOf(at: string, zone: string): { on: CivilDate; time: string
 }
 
 /**
- * The last instant of a due date: the closing hour, or the end of the day without one.
+ * The last instant of a due date: the closing hour, or the end of the day without one, which is
+ * the next midnight.
  *
  * A closing hour that a daylight-saving change skips moves forward with the clock; one that
  * occurs twice is the first.

@@ -32,6 +32,7 @@ function factsOf(project: DemoProject): Fact[] {
         sentOn,
         receivedOn,
         dueOn,
+        channel,
         amountMinor,
       } = event.fact!
       const receivedAt =
@@ -47,6 +48,7 @@ function factsOf(project: DemoProject): Fact[] {
         receivedOn,
         receivedAt,
         dueOn,
+        channel,
         amountMinor,
         body: event.fact!.sinceOn ? { sinceOn: event.fact!.sinceOn } : {},
         recordedAt: '2026-01-01T00:00:00Z',
