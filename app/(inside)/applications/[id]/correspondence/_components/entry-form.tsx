@@ -94,11 +94,11 @@ export function EntryForm(props: EntryFormProps) {
         errorOf={errorOf}
         openIn={openIn}
       />
-      <div className="mt-4 flex flex-wrap gap-2.5">
+      <div className="bg-film mt-2 flex flex-wrap gap-2.5 py-2.5 max-md:sticky max-md:bottom-[calc(3.5rem+env(safe-area-inset-bottom))]">
         <Button type="submit" look="primary" busy={busy} busyLabel="Recording">
           {draft.proof ? 'Record entry and event' : 'Record entry'}
         </Button>
-        <Button onClick={props.onCancel}>Close without recording</Button>
+        <Button onClick={props.onCancel}>Discard</Button>
       </div>
     </form>
   )
