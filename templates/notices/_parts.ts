@@ -81,7 +81,7 @@ function plainLinkHtml(label: string, href: string): string {
 function blockHtml(cells: readonly { caption: string; value: string }[]): string {
   const rows = cells.map(
     ({ caption, value }) =>
-      `<tr><td style="padding: 7px 12px; border-bottom: 1px solid ${rule}; font-size: 13px; color: ${ink2}; ${face};">${escapeHtml(caption)}</td><td style="padding: 7px 12px; border-bottom: 1px solid ${rule}; font-size: 15px; font-weight: 600; ${face};">${escapeHtml(value)}</td></tr>`,
+      `<tr><td style="padding: 7px 12px; border-bottom: 1px solid ${rule}; font-size: 13px; white-space: nowrap; color: ${ink2}; ${face};">${escapeHtml(caption)}</td><td style="padding: 7px 12px; border-bottom: 1px solid ${rule}; font-size: 15px; font-weight: 600; ${face};">${escapeHtml(value)}</td></tr>`,
   )
   return `<table role="presentation" width="100%" cellpadding="0" cellspacing="0" style="margin: 0 0 18px; border: 1px solid ${ink}; border-bottom: 0;">${rows.join('')}</table>`
 }

@@ -26,8 +26,8 @@ export default async function NoticesPage({ searchParams }: Props) {
     <>
       <h1>Notices</h1>
       <p className="text-ink-2 mt-1 max-w-2xl">
-        E-mails about clocks, exhibits to check and invitations. A notice waits while the mail
-        server is away; none is lost, and none goes out twice for the same date.
+        E-mails about clocks, exhibits to check and invitations. While the mail server is away they
+        wait; none is lost.
       </p>
       <LinkTabs
         label="Notices by state"

@@ -84,7 +84,8 @@ function HowItStands({ notice, when }: HowItStandsProps) {
   if (state === 'sent' && acceptedAt)
     return (
       <>
-        <StateWord tone="done">sent</StateWord> <span className="mono">{when(acceptedAt)}</span>
+        <StateWord tone="done">sent</StateWord>
+        <span className="mono ml-2">{when(acceptedAt)}</span>
       </>
     )
   if (state === 'waiting') return <StateWord tone="plain">waiting to be sent</StateWord>
