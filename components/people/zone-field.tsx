@@ -31,7 +31,7 @@ export function ZoneField({ defaultValue, error, stacked }: ZoneFieldProps) {
       stacked={stacked}
       options={listed.map(([value, label]) => ({ value, label }))}
       defaultValue={defaultValue}
-      hint="Hours are shown in it. A clock is counted in the utility's zone."
+      hint="Hours are shown in it. A clock is counted in the utility’s zone."
       error={error}
     />
   )

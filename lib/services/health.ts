@@ -59,8 +59,10 @@ async function checkJobs(db: Db): Promise<void> {
   if (waiting > 0) throw new Error(`${waiting} jobs wait for a worker`)
 }
 
-function checkMail(): Promise<void> {
-  const url = new URL(process.env.SMTP_URL ?? '')
+async function checkMail(): Promise<void> {
+  const given = process.env.SMTP_URL
+  if (!given) throw new Error('SMTP_URL is not set: no mail server to reach.')
+  const url = new URL(given)
   const port = Number(url.port || (url.protocol === 'smtps:' ? 465 : 587))
   return new Promise((resolve, reject) => {
     const socket = connect({ host: url.hostname, port, timeout: answerWithinMs })

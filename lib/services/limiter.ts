@@ -1,4 +1,4 @@
-import { eq, sql } from 'drizzle-orm'
+import { eq, lt, sql } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { attempts } from '@/db/schema/people'
 import { ServiceError } from '@/lib/services/errors'
@@ -12,19 +12,22 @@ export interface Limit {
 
 const minute = 60_000
 
-/** Tries of sign-in for one address, and from one network address (a whole office may share it). */
+/**
+ * Tries of sign-in from one network address (a whole office may share it), then for one address: a
+ * network that is blocked makes no more rows with addresses it thinks up.
+ */
 export function signInLimits(email: string, network: string): Limit[] {
   return [
-    { key: `sign-in:address:${email}`, tries: 10, windowMs: 15 * minute },
     { key: `sign-in:network:${network}`, tries: 100, windowMs: 15 * minute },
+    { key: `sign-in:address:${email}`, tries: 10, windowMs: 15 * minute },
   ]
 }
 
 /** Requests for a reset link: each one sends an e-mail. */
 export function resetLimits(email: string, network: string): Limit[] {
   return [
-    { key: `reset:address:${email}`, tries: 4, windowMs: 60 * minute },
     { key: `reset:network:${network}`, tries: 40, windowMs: 60 * minute },
+    { key: `reset:address:${email}`, tries: 4, windowMs: 60 * minute },
   ]
 }
 
@@ -72,9 +75,15 @@ async function countTry(db: Db, { key, tries, windowMs }: Limit, now: Date): Pro
       },
     })
     .returning()
+  if (row?.count === 1) await forgetOld(db, now)
   if (!row || row.count <= tries) return 0
   const endsAt = row.windowStartsAt.getTime() + windowMs
   return Math.max(1, Math.ceil((endsAt - now.getTime()) / 1000))
+}
+
+async function forgetOld(db: Db, now: Date): Promise<void> {
+  const dayAgo = new Date(now.getTime() - 24 * 60 * minute)
+  await db.delete(attempts).where(lt(attempts.windowStartsAt, dayAgo))
 }
 
 function tooOften(waitSeconds: number): ServiceError {

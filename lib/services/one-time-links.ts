@@ -6,7 +6,7 @@ import type { LinkAcceptance, ResetRequest } from '@/lib/schemas/person'
 import { recordAudit } from '@/lib/services/audit'
 import { authorize, type Context } from '@/lib/services/context'
 import { ServiceError } from '@/lib/services/errors'
-import { queueNotice } from '@/lib/services/notices'
+import { queueNotice, siteUrl } from '@/lib/services/notices'
 import { hashPassword } from '@/lib/services/passwords'
 import { hashOfSecret, newSecret } from '@/lib/services/secrets'
 import { invitationLetter } from '@/templates/notices/invitation'
@@ -29,8 +29,8 @@ interface Addressee {
  * Makes a new invitation and queues its e-mail, inside the caller's transaction.
  *
  * The secret link stands in the body of the outbox row, because the row is what gets sent. That is
- * bearable: only the hash opens nothing, the link works once and for a week at most, and whoever
- * reads the outbox table can rewrite the people table as well.
+ * bearable: no page shows a body, the sender blanks the link once the e-mail was accepted, the link
+ * works once and for a week at most, and whoever reads the outbox table can rewrite the people too.
  */
 export async function sendInvitation(ctx: Context, tx: Tx, person: Addressee): Promise<void> {
   authorize(ctx, 'person.write')
@@ -96,11 +96,6 @@ async function endOpenLinks(ctx: Context, tx: Tx, personId: string): Promise<voi
         gt(oneTimeTokens.expiresAt, ctx.now),
       ),
     )
-}
-
-// From the configuration, never from the request: a forged Host header must not write our e-mail.
-function siteUrl(path: string): string {
-  return new URL(path, process.env.NEXTAUTH_URL ?? 'http://127.0.0.1:3000').href
 }
 
 export type LinkState =

@@ -146,14 +146,20 @@ describe('pages', () => {
     expect(layout).toMatch(/await pageContext\(\)/)
   })
 
+  const reads = (file: string) => readFileSync(path.join(root, file), 'utf8')
+
   test('a page that calls a service takes its context from the session', () => {
     const inside = pages.filter((file) => file.startsWith('app/(inside)/'))
     const careless = inside.filter((file) => {
-      const source = readFileSync(path.join(root, file), 'utf8')
-      const usesService = /from '@\/lib\/services\//.test(source)
-      return usesService && !/\b(pageContext|getPagePerson)\(\)/.test(source)
+      const usesService = /from '@\/lib\/services\//.test(reads(file))
+      return usesService && !/\b(pageContext|getPagePerson|readPage\w*)\(/.test(reads(file))
     })
     expect(careless).toEqual([])
+  })
+
+  test('what several pages read with takes its context from the session too', () => {
+    const readers = filesUnder('app', '_read.ts')
+    expect(readers.filter((file) => !/\bpageContext\(/.test(reads(file)))).toEqual([])
   })
 })
 

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import { eq } from 'drizzle-orm'
 import { describe, expect, test } from 'vitest'
-import { people } from '@/db/schema/people'
+import { attempts, people } from '@/db/schema/people'
 import { limitSignIn } from '@/lib/http/limited-sign-in'
 import { signInLimits, takeTry } from '@/lib/services/limiter'
 import { invitePerson } from '@/lib/services/people'
@@ -75,6 +75,18 @@ describe('the limiter in the database', () => {
     }
     const next = takeTry(db, signInLimits('spray-last@people.test', network), now)
     await expect(next).rejects.toMatchObject({ code: 'too_often' })
+  })
+})
+
+describe('the rows of the limiter', () => {
+  test('of a window that closed a day ago are gone at the next new address', async () => {
+    const { db } = visit()
+    const key = (email: string) => `sign-in:address:${email}`
+    await takeTry(db, signInLimits('long.ago@people.test', 'old'), later(-25 * 60))
+    await takeTry(db, signInLimits('today@people.test', 'new'), now)
+    const kept = (await db.select().from(attempts)).map((row) => row.key)
+    expect(kept).toContain(key('today@people.test'))
+    expect(kept).not.toContain(key('long.ago@people.test'))
   })
 })
 

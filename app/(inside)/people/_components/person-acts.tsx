@@ -20,7 +20,7 @@ interface PersonActsProps {
 /** What an administrator can do about a person. */
 export function PersonActs({ person, isSelf }: PersonActsProps) {
   return (
-    <div className="flex flex-wrap gap-x-1 gap-y-1 sm:justify-end">
+    <div className="flex flex-wrap gap-x-1 gap-y-1 max-sm:-ml-1.5 sm:justify-end">
       {person.standing === 'invited' && <InviteAgain person={person} />}
       <ChangePerson person={person} />
       {person.standing === 'disabled' ? (
