@@ -212,17 +212,34 @@ function chaseNumber(dueOn: CivilDate, today: CivilDate, calendar: BusinessCalen
   return late <= 0 ? 0 : 1 + Math.floor((late - 1) / chaseEveryBusinessDays)
 }
 
+/** Everybody who hears a rung: those who hold the clock, and those above where it escalates. */
+function recipientsOf({ obligation, people, assignedId }: RungsDueInput, rung: Rung): string[] {
+  const holders = holdersOf(obligation, people, assignedId)
+  const above = rung.escalates
+    ? [...having(people, 'developer'), ...having(people, 'executive')]
+    : []
+  return [...new Set([...holders, ...above.map((person) => person.id)])]
+}
+
 /**
- * The assigned person, else those of the owner's role, else developers, else administrators: a
- * clock is never without somebody who hears it. A person who is no longer active hears nothing.
+ * Who holds a clock: the assigned person, else those of the owner's role, else developers, else
+ * administrators, so that it is never without somebody. One who is no longer active holds nothing.
  */
-function recipientsOf(input: RungsDueInput, rung: Rung): string[] {
-  const { obligation, people, assignedId } = input
-  const holding = (role: OwnerRole) => people.filter((person) => person.roles.includes(role))
-  const assigned = people.filter((person) => person.id === assignedId)
+export function holdersOf(
+  obligation: Pick<NoticedObligation, 'ownerRole' | 'party'>,
+  people: readonly NoticedPerson[],
+  assignedId?: string | null,
+): string[] {
   const owner = obligation.ownerRole ?? (isOurs(obligation.party) ? 'developer' : 'liaison')
-  const choices = [assigned, holding(owner), holding('developer'), holding('administrator')]
-  const first = choices.find((choice) => choice.length > 0) ?? []
-  const above = rung.escalates ? [...holding('developer'), ...holding('executive')] : []
-  return [...new Set([...first, ...above].map((person) => person.id))]
+  const choices = [
+    people.filter((person) => person.id === assignedId),
+    having(people, owner),
+    having(people, 'developer'),
+    having(people, 'administrator'),
+  ]
+  return (choices.find((choice) => choice.length > 0) ?? []).map((person) => person.id)
+}
+
+function having(people: readonly NoticedPerson[], role: OwnerRole): NoticedPerson[] {
+  return people.filter((person) => person.roles.includes(role))
 }

@@ -13,14 +13,17 @@ import {
 import { calendarRevisions, calendars, organizations } from '@/db/schema/organizations'
 import { people } from '@/db/schema/people'
 import { businessCalendar, type BusinessCalendar } from '@/lib/domain/clocks/calendar'
+import { federalCalendar } from '@/lib/domain/clocks/library-calendars'
 import type { Role } from '@/lib/domain/access'
-import { obligationKey, workingDue } from '@/lib/domain/obligations'
+import { obligationKey, sayDue, workingDue } from '@/lib/domain/obligations'
+import { log } from '@/lib/services/log'
 
 export interface SweepPerson {
   id: string
   name: string
   email: string
   roles: Role[]
+  zone: string
 }
 
 type OpenRow = Awaited<ReturnType<typeof readOpen>>[number]
@@ -91,9 +94,16 @@ function readOpen(tx: Tx) {
     .where(eq(obligations.status, 'open'))
 }
 
+/** One obligation that cannot be read must not silence all others. */
 function datedOf(row: OpenRow): OpenObligation[] {
-  const due = workingDue({ ...row, dueAt: row.dueAt?.toISOString() ?? null })
-  return due ? [{ ...row, ...due }] : []
+  try {
+    const due = workingDue({ ...row, dueAt: row.dueAt?.toISOString() ?? null })
+    if (due) sayDue({ ...due, zone: row.zone })
+    return due ? [{ ...row, ...due }] : []
+  } catch (error) {
+    log.error({ error, obligation: obligationKey(row) }, 'no notice can be made')
+    return []
+  }
 }
 
 /** A step whose own obligations are open is told by them; both would say the same thing twice. */
@@ -109,6 +119,7 @@ async function readPeople(tx: Tx) {
       id: people.id,
       name: people.name,
       email: people.email,
+      zone: people.zone,
       roles: sql<Role[]>`array(
         select held.role from person_roles held where held.person_id = ${people.id}
       )`,
@@ -188,4 +199,31 @@ async function readQueued(tx: Tx, open: OpenObligation[]): Promise<Set<string>> 
       ),
     )
   return new Set(rows.map((row) => [row.key, row.dueOn, row.rung, row.personId].join('|')))
+}
+
+/** Whose business days count: the owing organization's, else the operator's, else federal ones. */
+export function calendarOf(
+  sweep: Sweep,
+  { applicationId, party }: OpenObligation,
+): BusinessCalendar {
+  const own = sweep.organizations.get(`${applicationId}/${party}`)
+  const operator = sweep.organizations.get(`${applicationId}/operator`)
+  const calendarId = (own ?? operator)?.calendarId
+  return (calendarId && sweep.calendars.get(calendarId)) || federalCalendar
+}
+
+/** The nearest assignment counts: of the obligation, of its step, of the application. */
+export function assignedTo(sweep: Sweep, of: OpenObligation): string | null {
+  const nearest = [
+    `${of.applicationId}/${of.step}/${of.instance}/${of.obligation}`,
+    `${of.applicationId}/${of.step}/${of.instance}/`,
+    `${of.applicationId}/${of.step}/0/`,
+    `${of.applicationId}/*/0/`,
+  ]
+  return nearest.map((key) => sweep.assigned.get(key)).find((id) => id !== undefined) ?? null
+}
+
+/** The next date an acknowledgment of this very due date names, or null. */
+export function silentUntil(sweep: Sweep, of: OpenObligation): string | null {
+  return sweep.acknowledgedUntil.get(`${obligationKey(of)}@${of.dueOn}`) ?? null
 }

@@ -2,13 +2,15 @@ import type { Tx } from '@/db/client'
 import { isOurs, rungsDue, type DueRung } from '@/lib/domain/notices'
 import { obligationKey } from '@/lib/domain/obligations'
 import { businessDaysTo } from '@/lib/domain/clocks/standing'
-import { federalCalendar } from '@/lib/domain/clocks/library-calendars'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import { routes } from '@/lib/routes'
 import { authorize, type Context } from '@/lib/services/context'
 import { log } from '@/lib/services/log'
 import {
+  assignedTo,
+  calendarOf,
   readSweep,
+  silentUntil,
   type OpenObligation,
   type Sweep,
   type SweepPerson,
@@ -40,13 +42,12 @@ export async function sweepNotices(ctx: Context): Promise<number> {
 
 function candidatesOf(ctx: Context, sweep: Sweep, obligation: OpenObligation): Candidate[] {
   try {
-    const key = obligationKey(obligation)
     const rungs = rungsDue({
       obligation: { ...obligation, effect: obligation.consequence.effect },
       now: ctx.now,
       zone: obligation.zone,
       calendar: calendarOf(sweep, obligation),
-      acknowledgedUntil: sweep.acknowledgedUntil.get(`${key}@${obligation.dueOn}`) ?? null,
+      acknowledgedUntil: silentUntil(sweep, obligation),
       assignedId: assignedTo(sweep, obligation),
       people: [...sweep.people.values()],
     })
@@ -58,24 +59,6 @@ function candidatesOf(ctx: Context, sweep: Sweep, obligation: OpenObligation): C
     log.error({ error, obligation: obligationKey(obligation) }, 'no notice could be made')
     return []
   }
-}
-
-function calendarOf(sweep: Sweep, { applicationId, party }: OpenObligation) {
-  const own = sweep.organizations.get(`${applicationId}/${party}`)
-  const operator = sweep.organizations.get(`${applicationId}/operator`)
-  const calendarId = (own ?? operator)?.calendarId
-  return (calendarId && sweep.calendars.get(calendarId)) || federalCalendar
-}
-
-/** The nearest assignment counts: of the obligation, of its step, of the application. */
-function assignedTo(sweep: Sweep, of: OpenObligation): string | null {
-  const nearest = [
-    `${of.applicationId}/${of.step}/${of.instance}/${of.obligation}`,
-    `${of.applicationId}/${of.step}/${of.instance}/`,
-    `${of.applicationId}/${of.step}/0/`,
-    `${of.applicationId}/*/0/`,
-  ]
-  return nearest.map((key) => sweep.assigned.get(key)).find((id) => id !== undefined) ?? null
 }
 
 function candidateKey({ obligation, rung, person }: Candidate): string {

@@ -1,6 +1,7 @@
 import { setTimeout as pause } from 'node:timers/promises'
 import type { Mailer } from '@/lib/domain/delivery'
 import { log } from '@/lib/services/log'
+import { sweepDigests } from '@/lib/services/notice-digest'
 import { sendNotices } from '@/lib/services/notice-send'
 import { sweepNotices } from '@/lib/services/notice-sweep'
 import { jobContext } from '@/lib/worker/context'
@@ -17,9 +18,10 @@ export async function drainNotices(mailer: Mailer, stopping?: AbortSignal): Prom
   }
 }
 
-/** Looks for notices that have become due. */
+/** Looks for notices and morning digests that have become due. */
 export async function sweep(): Promise<void> {
-  const queued = await sweepNotices(jobContext('sweepNotices'))
+  const ctx = jobContext('sweepNotices')
+  const queued = (await sweepNotices(ctx)) + (await sweepDigests(ctx))
   if (queued > 0) log.info({ queued }, 'notices queued')
 }
 

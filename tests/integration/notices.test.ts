@@ -6,6 +6,7 @@ import { acknowledgements, assignments, notices, obligations } from '@/db/schema
 import { people } from '@/db/schema/people'
 import type { Role } from '@/lib/domain/access'
 import { listNotices } from '@/lib/services/notice-list'
+import { sweepDigests } from '@/lib/services/notice-digest'
 import { sweepNotices } from '@/lib/services/notice-sweep'
 import { queueNotice } from '@/lib/services/notices'
 import { jobContext } from '@/lib/worker/context'
@@ -124,7 +125,10 @@ describe('a sweep', () => {
 
   it('an earlier date in the letter of the utility is the one it goes by', async () => {
     await person('developer')
-    const { applicationId } = await createOpenObligation({ statedDueOn: '2026-12-07' })
+    const { applicationId } = await createOpenObligation({
+      statedDueOn: '2026-12-07',
+      dueAt: new Date('2026-12-08T00:00:00Z'),
+    })
     await sweep(morningOf('2026-12-07'))
     const [notice] = await noticesAbout(applicationId!)
     expect(notice).toMatchObject({ rung: 'today', dueOn: '2026-12-07' })
@@ -171,6 +175,45 @@ describe('a sweep', () => {
     const { applicationId } = await createOpenObligation()
     expect(await sweep(morningOf('2026-12-03'))).toBe(1)
     expect(await noticesAbout(applicationId!)).toHaveLength(1)
+  })
+})
+
+describe('the morning digest', () => {
+  const digests = (now: string) => sweepDigests(jobContext('sweepNotices', new Date(now)))
+
+  it('goes once a morning to whoever holds something near, and to nobody else', async () => {
+    const developer = await person('developer')
+    await person('engineer')
+    await createOpenObligation()
+    expect(await digests(morningOf('2026-12-03'))).toBe(1)
+    expect(await digests('2026-12-03T17:00:00Z')).toBe(0)
+    expect(await digests(morningOf('2026-12-04'))).toBe(1)
+    const told = await getDb()
+      .select()
+      .from(notices)
+      .where(eq(notices.personId, developer.actor.id))
+      .orderBy(notices.dueOn)
+    expect(told.map((one) => one.body.subject)).toEqual([
+      'Your clocks, Thu 3 Dec 2026: 1 near',
+      'Your clocks, Fri 4 Dec 2026: 1 near',
+    ])
+    expect(told[0]?.body.text).toContain('5 BD: Cure the deficiency')
+  })
+
+  it('leaves out what is acknowledged until a later day', async () => {
+    const developer = await person('developer')
+    const { applicationId } = await createOpenObligation()
+    await getDb().insert(acknowledgements).values({
+      applicationId: applicationId!,
+      step: 'cure',
+      instance: 1,
+      dueOn: '2026-12-10',
+      personId: developer.actor.id,
+      reason: 'In hand.',
+      untilOn: '2026-12-08',
+    })
+    expect(await digests(morningOf('2026-12-07'))).toBe(0)
+    expect(await digests(morningOf('2026-12-08'))).toBe(1)
   })
 })
 
