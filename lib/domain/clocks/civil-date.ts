@@ -6,7 +6,7 @@
  */
 export type CivilDate = string
 
-const pattern = /^(\d{4})-(\d{2})-(\d{2})$/
+const pattern = /^\d{4}-\d{2}-\d{2}$/
 
 export interface DateParts {
   year: number
@@ -16,11 +16,11 @@ export interface DateParts {
 
 /** Year, month and day of a civil date. @throws RangeError for anything that is no real date. */
 export function partsOf(on: CivilDate): DateParts {
-  const match = pattern.exec(on)
-  const year = Number(match?.[1])
-  const month = Number(match?.[2])
-  const day = Number(match?.[3])
-  if (!match || month < 1 || month > 12 || day < 1 || day > daysInMonth(year, month))
+  const year = Number(on.slice(0, 4))
+  const month = Number(on.slice(5, 7))
+  const day = Number(on.slice(8))
+  const fits = pattern.test(on) && month >= 1 && month <= 12 && day >= 1
+  if (!fits || day > daysInMonth(year, month))
     throw new RangeError(`"${on}" is no date of the form YYYY-MM-DD.`)
   return { year, month, day }
 }

@@ -6,7 +6,7 @@ import {
   type CivilDate,
 } from '@/lib/domain/clocks/civil-date'
 import { businessDayFrom } from '@/lib/domain/clocks/calendar'
-import { count, skippedDays, type CountedDay } from '@/lib/domain/clocks/count'
+import { countedDays, skippedDays, type CountedDay } from '@/lib/domain/clocks/count'
 import type { DerivationLine } from '@/lib/domain/clocks/derivation'
 import type { Fact } from '@/lib/domain/clocks/facts'
 import {
@@ -19,7 +19,7 @@ import {
 import type { ClockRule, Consequence, Step, StepRef } from '@/lib/domain/clocks/procedure'
 import { sayDate, sayLength } from '@/lib/domain/clocks/say'
 import type { OrganizationRules } from '@/lib/domain/clocks/schedule-types'
-import { stopHolding, type Stop } from '@/lib/domain/clocks/stops'
+import type { Stop } from '@/lib/domain/clocks/stops'
 
 export interface RunClock {
   dueOn: CivilDate | null
@@ -101,10 +101,14 @@ function stopsHolding(
 }
 
 function stoppedDay(stops: readonly Stop[]): ((day: number) => string | null) | undefined {
-  const ended = stops.filter((stop) => stop.toOn !== null)
+  const ended = stops.flatMap((stop) =>
+    stop.toOn === null
+      ? []
+      : [{ from: dayNumber(stop.fromOn), to: dayNumber(stop.toOn), why: stop.why }],
+  )
   if (ended.length === 0) return undefined
   return (day) => {
-    const stop = stopHolding(ended, fromDayNumber(day))
+    const stop = ended.find(({ from, to }) => day >= from && day <= to)
     return stop ? `clock stopped (${stop.why})` : null
   }
 }
@@ -123,7 +127,7 @@ function countedDue(
     const text = 'No date yet: the clock counts from a date that is not known.'
     return { ...undated, lines: [{ kind: 'note', text }] }
   }
-  const result = count(
+  const result = countedDays(
     {
       start: from.afterHours ? businessDayFrom(rules.calendar, addDays(from.on, 1), 1) : from.on,
       length: clock.length,
@@ -162,7 +166,10 @@ function enteredDue(
     .filter((day) => stopped(day) !== null)
     .filter((day) => unit === 'calendar_day' || rules.calendar.closedOnDay(day) === null)
   if (days.length === 0) return { ...undated, dueOn }
-  const moved = count({ start: dueOn, length: days.length, unit, stopped }, rules.calendar).dueOn
+  const moved = countedDays(
+    { start: dueOn, length: days.length, unit, stopped },
+    rules.calendar,
+  ).dueOn
   const text = `${sayLength(days.length, unit)} of a stopped clock added: ${sayDate(moved)}.`
   return { ...undated, dueOn: moved, lines: [{ kind: 'stop', on: moved, text }] }
 }
@@ -273,7 +280,7 @@ function extensionEnd(
   if (fact.dueOn) return fact.dueOn
   if (!fact.body.lengthDays || !baseOn) return null
   const unit = fact.body.unit ?? 'business_day'
-  return count({ start: baseOn, length: fact.body.lengthDays, unit }, rules.calendar).dueOn
+  return countedDays({ start: baseOn, length: fact.body.lengthDays, unit }, rules.calendar).dueOn
 }
 
 /** Business days of lead before a due date. */

@@ -55,6 +55,15 @@ export const longestCount: Record<Unit, number> = {
  * @throws RangeError for a date that is none or a length outside 0 to `longestCount`.
  */
 export function count(input: CountInput, calendar: BusinessCalendar): CountResult {
+  const counted = countedDays(input, calendar)
+  return { ...counted, account: accountOf(input, calendar, counted) }
+}
+
+/** The same without the account in words. */
+export function countedDays(
+  input: CountInput,
+  calendar: BusinessCalendar,
+): Omit<CountResult, 'account'> {
   const { length, unit } = input
   if (!Number.isInteger(length) || length < 0 || length > longestCount[unit])
     throw new RangeError(
@@ -66,13 +75,7 @@ export function count(input: CountInput, calendar: BusinessCalendar): CountResul
     unit === 'business_day' || unit === 'calendar_day'
       ? countDays(input, calendar, zero, days)
       : countMonths(input, zero, days)
-  const dueOn = rolled(input, calendar, raw, days)
-  return {
-    dueOn,
-    dayZeroOn: zero,
-    derivation: days,
-    account: accountOf(input, calendar, zero, dueOn, days),
-  }
+  return { dueOn: rolled(input, calendar, raw, days), dayZeroOn: zero, derivation: days }
 }
 
 function dayZero(input: CountInput, calendar: BusinessCalendar, days: CountedDay[]): CivilDate {
@@ -193,11 +196,9 @@ export function skippedDays(days: readonly CountedDay[]): {
 function accountOf(
   input: CountInput,
   calendar: BusinessCalendar,
-  zero: CivilDate,
-  dueOn: CivilDate,
-  days: readonly CountedDay[],
+  { dayZeroOn: zero, dueOn, derivation }: Omit<CountResult, 'account'>,
 ): string {
-  const { weekendDays, named } = skippedDays(days)
+  const { weekendDays, named } = skippedDays(derivation)
   const back = input.direction === 'before'
   const lines = [
     `${sayLength(input.length, input.unit)} ${back ? 'before' : 'from'} ${sayDate(zero)}` +

@@ -1,7 +1,7 @@
 import { effectiveFacts, type Fact } from '@/lib/domain/clocks/facts'
 import { whyUnsound } from '@/lib/domain/clocks/fact-soundness'
 import type { ProcedureBody } from '@/lib/domain/clocks/procedure'
-import { stopsOf, withdrawalOf, type Stop } from '@/lib/domain/clocks/stops'
+import { marksOf, stopsOf, withdrawalOf, type Stop } from '@/lib/domain/clocks/stops'
 import { localOf } from '@/lib/domain/clocks/zoned'
 
 /** The facts in force, found by what a step asks for. */
@@ -53,16 +53,17 @@ export function indexFacts(
     else slots.set(slot, [fact])
   }
   strandRepeats(slots, stranded)
+  const marks = marksOf(facts)
   const stops = new Map<string, Stop[]>()
   return {
     facts,
     ...lookups(slots, facts),
     stops(step) {
-      const known = stops.get(step) ?? stopsOf(facts, step)
+      const known = stops.get(step) ?? stopsOf(marks, step)
       stops.set(step, known)
       return known
     },
-    withdrawn: withdrawalOf(facts),
+    withdrawn: withdrawalOf(marks),
     stranded,
   }
 }

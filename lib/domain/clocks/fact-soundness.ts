@@ -18,14 +18,16 @@ function isSoundDate(on: string): boolean {
 
 /** Why a fact cannot be counted with, in words; null when it can. */
 export function whyUnsound(fact: Fact, body: ProcedureBody): string | null {
-  const given = [...dates.map((name) => fact[name]), fact.body.sinceOn]
-  const bad = given.find((on) => on !== undefined && !isSoundDate(on))
+  const given = [...dates.map((name) => fact[name]), fact.body.sinceOn].filter(
+    (on) => on !== undefined,
+  )
+  const bad = given.find((on) => !isSoundDate(on))
   if (bad !== undefined) return `"${bad}" is no date from 1900 to 2199.`
   const badAt = instants.map((name) => fact[name]).find((at) => at && !isSoundInstant(at))
   if (badAt) return `"${badAt}" is no instant.`
   if (!Number.isInteger(fact.instance) || fact.instance < 1)
     return `Round ${fact.instance} is none.`
-  if (ofADay.has(fact.kind) && !given.some(Boolean) && !fact.sentAt && !fact.receivedAt)
+  if (ofADay.has(fact.kind) && given.length === 0 && !fact.sentAt && !fact.receivedAt)
     return 'A clock stops or goes on from a day, and none is given.'
   return whyNoStep(fact, body) ?? whyNoExtension(fact)
 }

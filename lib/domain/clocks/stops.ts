@@ -30,7 +30,7 @@ function markDate(fact: Fact): CivilDate {
 }
 
 /** Stops, resumptions, withdrawals and reinstatements by the day they hold from. */
-function marksOf(facts: readonly Fact[]): Fact[] {
+export function marksOf(facts: readonly Fact[]): Fact[] {
   return facts
     .filter((fact) => rank[fact.kind] !== undefined)
     .sort(
@@ -39,15 +39,15 @@ function marksOf(facts: readonly Fact[]): Fact[] {
     )
 }
 
-/** The stops of a step, told by the days of the facts and not by the order they came in. */
-export function stopsOf(facts: readonly Fact[], step: string): Stop[] {
+/** The stops of a step, told by the days of the marks and not by the order they came in. */
+export function stopsOf(marks: readonly Fact[], step: string): Stop[] {
   const stops: Stop[] = []
   const concerns = (scope?: string[]) => scope === undefined || scope.includes(step)
   const end = (fact: Fact, withdrawal: boolean) => {
     for (const stop of stops)
       if (stop.toOn === null && stop.withdrawal === withdrawal) stop.toOn = markDate(fact)
   }
-  for (const fact of marksOf(facts)) {
+  for (const fact of marks) {
     if (fact.kind === 'reinstated') end(fact, true)
     else if (fact.kind === 'withdrawn') stops.push(stopFrom(fact, true))
     else if (!concerns(fact.body.scope)) continue
@@ -68,14 +68,7 @@ function stopFrom(fact: Fact, withdrawal: boolean): Stop {
 }
 
 /** The withdrawal in force, if the last word was one. */
-export function withdrawalOf(facts: readonly Fact[]): Fact | undefined {
-  const last = marksOf(facts).findLast(
-    (fact) => fact.kind === 'withdrawn' || fact.kind === 'reinstated',
-  )
+export function withdrawalOf(marks: readonly Fact[]): Fact | undefined {
+  const last = marks.findLast((fact) => fact.kind === 'withdrawn' || fact.kind === 'reinstated')
   return last?.kind === 'withdrawn' ? last : undefined
-}
-
-/** The stop that holds a day; the first and the last day of a stop do not count. */
-export function stopHolding(stops: readonly Stop[], on: CivilDate): Stop | undefined {
-  return stops.find((stop) => on >= stop.fromOn && (stop.toOn === null || on <= stop.toOn))
 }
