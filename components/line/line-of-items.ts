@@ -31,14 +31,17 @@ export interface LineExtras {
 
 /**
  * The step line of an application from its items in drawing order. Dates are civil dates in the
- * utility's zone, worded against `todayOn`.
+ * utility's zone, worded against `todayOn`. What a later step overtook without a record of its own
+ * has no date to stand at and is left to the clocks.
  */
 export function lineModelOf(
   items: readonly LineSource[],
   todayOn: string,
   extras: LineExtras = {},
 ): LineModel {
-  const steps = items.filter((item) => item.obligation === '' && item.onLine)
+  const steps = items.filter(
+    (item) => item.obligation === '' && item.onLine && item.status !== 'closed',
+  )
   const repeated = new Set(steps.filter((item) => item.instance > 1).map((item) => item.step))
   return {
     steps: steps.map((item) => ({

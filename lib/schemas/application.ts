@@ -75,7 +75,7 @@ export const itemSchema = z.object({
   standing: standingSchema,
   owner: z.object({ id: z.string(), name: z.string() }).nullable(),
   acknowledged: z
-    .object({ by: z.string(), reason: z.string(), untilOn: date, at: z.string() })
+    .object({ by: z.string(), reason: z.string(), untilOn: z.string(), at: z.string() })
     .nullable(),
 })
 export type ItemView = z.infer<typeof itemSchema>

@@ -11,7 +11,7 @@ import { entries, factEvidence } from '@/db/schema/correspondence'
 import { organizations, procedureRevisions, procedures } from '@/db/schema/organizations'
 import { people } from '@/db/schema/people'
 import { localOf } from '@/lib/domain/clocks/zoned'
-import type { ProcedureBody } from '@/lib/domain/clocks/procedure'
+import { stepOf, type ProcedureBody } from '@/lib/domain/clocks/procedure'
 import type { ApplicationView, FactView, ItemView, RecordableStep } from '@/lib/schemas/application'
 import type { Context } from '@/lib/services/context'
 import { notFound } from '@/lib/services/errors'
@@ -45,6 +45,7 @@ export async function readApplication(ctx: Context, id: string): Promise<Applica
     todayOn: localOf(ctx.now.toISOString(), parties.operator.zone).on,
     items,
     recordable: recordableSteps(head.revision.body, items),
+    settled: settledSteps(head.revision.body, items),
     facts: await factViews(ctx, id, head.revision.body),
     stranded: head.state.stranded,
   }
@@ -171,30 +172,43 @@ export function recordableSteps(body: ProcedureBody, items: readonly ItemView[])
   const steps = items.filter((item) => item.obligation === '')
   const listed = steps.filter((item) => ['open', 'stopped', 'waiting'].includes(item.status))
   const anytime = body.steps
-    .filter((step) => step.kind === 'anytime' || step.kind === 'recurring')
+    .filter((step) => step.kind === 'anytime')
     .map((step) => ({
       step: step.key,
       instance: steps.filter((item) => item.step === step.key).length + 1,
       status: 'open' as const,
     }))
   return [...listed, ...anytime]
-    .map(({ step: key, instance, status }) => {
-      const step = body.steps.find((one) => one.key === key)!
-      return {
-        step: key,
-        instance,
-        status,
-        title: step.title,
-        stage: step.stage,
-        party: step.party,
-        evidence: step.evidence ?? null,
-        outcomes: step.outcomes,
-        obligations: (step.obligations ?? []).map(({ key: name, title, what }) => ({
-          key: name,
-          title,
-          what,
-        })),
-      }
-    })
+    .map((one) => recordableStep(body, one))
     .sort((a, b) => Number(a.status === 'waiting') - Number(b.status === 'waiting'))
+}
+
+/** The steps that are closed, with the outcomes and parts that a correction may choose. */
+function settledSteps(body: ProcedureBody, items: readonly ItemView[]): RecordableStep[] {
+  return items
+    .filter((item) => item.obligation === '')
+    .filter((item) => !['open', 'stopped', 'waiting'].includes(item.status))
+    .map((item) => recordableStep(body, item))
+}
+
+function recordableStep(
+  body: ProcedureBody,
+  { step: key, instance, status }: Pick<RecordableStep, 'step' | 'instance' | 'status'>,
+): RecordableStep {
+  const step = stepOf(body, key)
+  return {
+    step: key,
+    instance,
+    status,
+    title: step.title,
+    stage: step.stage,
+    party: step.party,
+    evidence: step.evidence ?? null,
+    outcomes: step.outcomes,
+    obligations: (step.obligations ?? []).map(({ key: name, title, what }) => ({
+      key: name,
+      title,
+      what,
+    })),
+  }
 }

@@ -48,6 +48,10 @@ describe('the step line of an application', () => {
     expect(lineModelOf(items, todayOn).steps.map((step) => step.key)).toEqual(['cure'])
   })
 
+  it('leaves out what a later step overtook without a record of its own', () => {
+    expect(lineModelOf([item({ status: 'closed' })], todayOn).steps).toEqual([])
+  })
+
   it('hangs the parts of a gate between its bars, closed where done or waived', () => {
     const items = [
       item({ step: 'gate', kind: 'gate' }),
