@@ -16,6 +16,7 @@ const config: NextConfig = {
   // `npm run check` checks the types; a build on a person's machine need not do it again.
   typescript: { tsconfigPath, ignoreBuildErrors: true },
   poweredByHeader: false,
+  devIndicators: false,
   reactStrictMode: true,
   serverExternalPackages: ['@node-rs/argon2', 'graphile-worker', 'pg', 'pino', '@resvg/resvg-js'],
   turbopack: { root: import.meta.dirname },

@@ -17,6 +17,7 @@ export default defineConfig({
           testTimeout: 60_000,
           hookTimeout: 120_000,
           maxWorkers: 2,
+          sequence: { groupOrder: 1 },
         },
       },
       {
@@ -28,6 +29,7 @@ export default defineConfig({
           testTimeout: 600_000,
           hookTimeout: 120_000,
           maxWorkers: 1,
+          sequence: { groupOrder: 2 },
         },
       },
     ],

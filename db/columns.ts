@@ -7,7 +7,8 @@ export const id = () => uuid().primaryKey().defaultRandom()
 export const instant = () => timestamp({ withTimezone: true, mode: 'date' })
 
 /** When the row was written. */
-export const recordedAt = () => timestamp({ withTimezone: true, mode: 'date' }).notNull().defaultNow()
+export const recordedAt = () =>
+  timestamp({ withTimezone: true, mode: 'date' }).notNull().defaultNow()
 
 /** A civil date, `YYYY-MM-DD`; never an instant. */
 export const civilDate = () => date({ mode: 'string' })

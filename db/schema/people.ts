@@ -1,4 +1,13 @@
-import { boolean, index, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import {
+  boolean,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uuid,
+} from 'drizzle-orm/pg-core'
 import type { Role } from '@/lib/domain/access'
 import { id, instant, recordedAt } from '@/db/columns'
 

@@ -51,6 +51,15 @@ export async function actorOfApiToken(
   return actorOf(row)
 }
 
+/** The active person whose private calendar address this is; null where it is nobody's. */
+export async function actorOfCalendarSecret(db: Db, secret: string): Promise<PersonActor | null> {
+  const [row] = await db
+    .select(actorColumns)
+    .from(people)
+    .where(and(eq(people.calendarSecretHash, hashOfSecret(secret)), eq(people.active, true)))
+  return row ? actorOf(row) : null
+}
+
 async function noteUse(db: Db, hash: string, now: Date): Promise<void> {
   const before = new Date(now.getTime() - lastUseGrainMs)
   await db
