@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import { eq, isNotNull } from 'drizzle-orm'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
-import { getDb } from '@/db/client'
+import { getDb, getPool } from '@/db/client'
 import { notices } from '@/db/schema/applications'
 import { smtpMailer } from '@/lib/mail/smtp'
 import { listNotices } from '@/lib/services/notice-list'
@@ -70,6 +70,15 @@ async function drain(mailer: ReturnType<typeof mailerTo>, now = start): Promise<
 const list = async () => (await listNotices(reader.ctx(start), {})).items
 
 describe('sending', () => {
+  it('a queued notice nudges the sender, many notices make one nudge', async () => {
+    await queue(3)
+    await queue(2)
+    const { rows } = await getPool().query(
+      `select task_identifier from graphile_worker.jobs where key = 'sendNotices'`,
+    )
+    expect(rows).toEqual([{ task_identifier: 'sendNotices' }])
+  })
+
   it('every notice arrives once, whole, under the Message-ID of its row', async () => {
     const server = await receiver()
     await queue(12)
