@@ -84,6 +84,8 @@ function overtaken(graph: Graph, node: Node, step: Step): Node {
   return {
     ...node,
     status: 'closed',
+    // It was skipped, on no day: nothing to draw.
+    onLine: false,
     derivation: [...node.derivation, { kind: 'note', text: `Overtaken by: ${by.title}.` }],
   }
 }
