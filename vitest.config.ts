@@ -6,8 +6,18 @@ export default defineConfig({
   resolve: { alias },
   test: {
     projects: [
-      { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },
-      { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'] } },
+      {
+        extends: true,
+        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], testTimeout: 60_000 },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'reference',
+          include: ['tests/reference/**/*.test.ts'],
+          testTimeout: 60_000,
+        },
+      },
       {
         extends: true,
         test: {
