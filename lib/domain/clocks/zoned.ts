@@ -1,5 +1,5 @@
-import { DateTime } from 'luxon'
-import type { CivilDate } from '@/lib/domain/clocks/civil-date'
+import { DateTime, IANAZone } from 'luxon'
+import { addDays, type CivilDate } from '@/lib/domain/clocks/civil-date'
 
 /** The civil date and local `HH:MM:SS` of an instant in a zone. */
 export function localOf(at: string, zone: string): { on: CivilDate; time: string } {
@@ -19,13 +19,9 @@ export function closingInstant(on: CivilDate, closesAt: string | null, zone: str
   const key = `${on} ${closesAt} ${zone}`
   const known = closings.get(key)
   if (known) return known
-  const day = DateTime.fromISO(on, { zone })
-  const end = closesAt
-    ? DateTime.fromISO(`${on}T${closesAt}:00`, { zone })
-    : day.plus({ days: 1 }).startOf('day')
-  if (!end.isValid)
-    throw new RangeError(`"${on}" at "${closesAt}" in zone "${zone}" is no instant.`)
-  const made = end.toUTC().toISO()
+  const made = closesAt
+    ? localInstant(on, closesAt, zone)
+    : localInstant(addDays(on, 1), '00:00', zone)
   if (closings.size >= mostClosings) closings.clear()
   closings.set(key, made)
   return made
@@ -34,6 +30,26 @@ export function closingInstant(on: CivilDate, closesAt: string | null, zone: str
 // Asking a zone for its offset is most of the time of a schedule, and requests share their days.
 const closings = new Map<string, string>()
 const mostClosings = 20_000
+
+/**
+ * The first instant that reads so on the clocks of the zone, by the offsets of the day before and
+ * the day after. The library's own reading of a local hour that comes twice goes by today's
+ * offset, and would change with the season in which it is asked.
+ */
+function localInstant(on: CivilDate, time: string, zone: string): string {
+  const iana = IANAZone.create(zone)
+  const wall = Date.parse(`${on}T${time}:00Z`)
+  if (!iana.isValid || Number.isNaN(wall))
+    throw new RangeError(`"${on}" at "${time}" in zone "${zone}" is no instant.`)
+  const readings = [-dayMs, dayMs]
+    .map((away) => iana.offset(wall + away) * 60_000)
+    .map((offsetMs) => ({ at: wall - offsetMs, offsetMs }))
+  const real = readings.filter(({ at, offsetMs }) => iana.offset(at) * 60_000 === offsetMs)
+  const at = real.length > 0 ? Math.min(...real.map((one) => one.at)) : readings[0]!.at
+  return new Date(at).toISOString()
+}
+
+const dayMs = 86_400_000
 
 /** The instant of a local date and `HH:MM` in a zone. */
 export function instantOf(on: CivilDate, time: string, zone: string): string {

@@ -29,6 +29,8 @@ describe('a receipt on a Saturday before Memorial Day, three business days', () 
     expect(count({ ...saturday, receipt: 'as_is' }, federalCalendar).dueOn).toBe('2026-05-28')
   })
   it('is one day later where the receipt itself moves to the next business day', () => {
-    expect(count({ ...saturday, receipt: 'next_business_day' }, federalCalendar).dueOn).toBe('2026-05-29')
+    expect(count({ ...saturday, receipt: 'next_business_day' }, federalCalendar).dueOn).toBe(
+      '2026-05-29',
+    )
   })
 })
