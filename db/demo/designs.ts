@@ -60,7 +60,7 @@ export const demoWeather: Record<DemoWeather, SyntheticYearInput> = {
   },
 }
 
-const module: DesignBody['module'] = {
+const halden580: DesignBody['module'] = {
   name: 'Halden 580B',
   pmaxW: 580,
   vocV: 51.6,
@@ -115,7 +115,7 @@ const main = (mva: number, highKv: number, impedancePct = 8, count = 1) => ({
 
 /** What all of them share; a project's design states what differs. */
 const common = {
-  module,
+  module: halden580,
   mounting: {
     kind: 'single_axis_tracker' as const,
     axisAzimuthDeg: 180,

@@ -9,6 +9,7 @@ import type { ApplicationView } from '@/lib/schemas/application'
 const tabs: readonly { tab: ApplicationTab; label: string }[] = [
   { tab: 'sequence', label: 'Sequence' },
   { tab: 'clocks', label: 'Clocks' },
+  { tab: 'design', label: 'Design' },
   { tab: 'correspondence', label: 'Correspondence' },
   { tab: 'record', label: 'Record' },
 ]
