@@ -3,6 +3,7 @@ import { DateTime } from 'luxon'
 import { assignments } from '@/db/schema/applications'
 import { demoPeople, type DemoOrganization, type DemoPerson } from '@/db/demo/organizations'
 import { demoProjects } from '@/db/demo/projects'
+import { seedDesigns } from '@/db/demo/seed-designs'
 import { seedHouse, type SeededHouse } from '@/db/demo/seed-house'
 import type { DemoEvent, DemoProject } from '@/db/demo/story'
 import type { Db } from '@/db/client'
@@ -28,7 +29,19 @@ export interface SeedOptions {
 export async function seedDemo({ db, now, password }: SeedOptions): Promise<void> {
   const house = await seedHouse(db, now, password)
   const todayOn = DateTime.fromJSDate(now, { zone: 'America/New_York' }).toFormat('yyyy-MM-dd')
-  for (const project of demoProjects(todayOn)) await playProject(db, now, house, project)
+  const places = new Map<string, Place>()
+  for (const project of demoProjects(todayOn))
+    places.set(project.name, await playProject(db, now, house, project))
+  await seedDesigns({
+    engineerAt: (instant) => contextOf(db, house, 'engineer', instant),
+    now,
+    places,
+  })
+}
+
+interface Place {
+  projectId: string
+  applicationId: string
 }
 
 async function playProject(
@@ -36,12 +49,12 @@ async function playProject(
   now: Date,
   house: SeededHouse,
   project: DemoProject,
-): Promise<void> {
+): Promise<Place> {
   const applicationId = randomUUID()
   const organization = house.organizations[project.organization]
   const firstOn = project.events[0]?.on
   const openedAt = firstOn ? at(firstOn, '09:00', organization.zone, now, -3) : now
-  await createApplication(
+  const view = await createApplication(
     contextOf(db, house, 'developer', openedAt),
     newApplicationInput.parse({
       id: applicationId,
@@ -60,6 +73,7 @@ async function playProject(
   await assign(db, house, applicationId, openedAt)
   for (const event of project.events)
     await playEvent(db, now, house, organization, applicationId, event)
+  return { projectId: view.project.id, applicationId }
 }
 
 async function assign(
