@@ -152,13 +152,14 @@ async function insertFact(
   ground: Ground,
 ): Promise<void> {
   const step = ground.body.steps.find((one) => one.key === input.step)
+  const replaced = ground.computed.facts.find((fact) => fact.id === input.replaces)
   await tx.insert(facts).values({
     id: input.id,
     applicationId,
     seq,
     kind: input.kind,
     step: input.step,
-    instance: input.instance ?? (step ? roundsOf(ground.schedule, step) : 1),
+    instance: input.instance ?? replaced?.instance ?? (step ? roundsOf(ground.schedule, step) : 1),
     obligation: input.obligation,
     sentOn: input.sentOn ?? localDate(input.sentAt, ground.zone),
     sentAt: instant(input.sentAt),

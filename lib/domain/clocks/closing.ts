@@ -39,6 +39,7 @@ function closeBy(graph: Graph, step: Step, node: Node, fact: Fact): void {
   node.outcome = outcomeOf(step, fact)
   node.doneOn = event?.on ?? null
   node.provisional = false
+  node.derivation = node.derivation.filter((line) => line.kind !== 'provisional')
   const on = node.doneOn ? ` ${sayDate(node.doneOn)}` : ''
   const text =
     fact.kind === 'taken_over'

@@ -138,7 +138,7 @@ function dueInstant(graph: Graph, step: Step, node: Node): void {
   if (node.provisional)
     node.derivation.push({
       kind: 'provisional',
-      text: 'Provisional: counted from a booked or presumed date.',
+      text: 'Provisional: it hangs on a date or a choice that is not settled.',
     })
 }
 
