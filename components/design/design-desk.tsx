@@ -1,7 +1,7 @@
 'use client'
 
 import { useRouter } from 'next/navigation'
-import { useCallback, useMemo, useState } from 'react'
+import { memo, useCallback, useMemo, useState } from 'react'
 import { chosen, draftOf, readDraft, typed } from '@/components/design/design-draft'
 import { startingDesign, type DesignFieldSpec } from '@/components/design/design-fields'
 import { FreezeBar } from '@/components/design/freeze-bar'
@@ -39,7 +39,14 @@ export function DesignDesk(props: DesignDeskProps) {
   const [draft, setDraft] = useState(() => draftOf(start))
   const [kept, setKept] = useState<readonly Weather[]>([])
   const [weatherId, setWeatherId] = useState(base?.weatherId ?? props.weather[0]?.id)
-  const weather = [...kept.filter((one) => !has(props.weather, one)), ...props.weather]
+  const weather = useMemo(
+    () => [...kept.filter((one) => !has(props.weather, one)), ...props.weather],
+    [kept, props.weather],
+  )
+  const weatherNames = useMemo(
+    () => Object.fromEntries(weather.map(({ id, name }) => [id, name])),
+    [weather],
+  )
   const chosenWeather = weather.find((one) => one.id === weatherId)
   const { design, errors } = useMemo(() => readDraft(draft), [draft])
   const checks = useMemo(() => (design ? checksOf(design) : []), [design])
@@ -120,16 +127,19 @@ export function DesignDesk(props: DesignDeskProps) {
         files={upload.files}
         refusals={upload.refusals}
       />
-      <KeptLists
+      <SteadyLists
         applicationId={applicationId}
         calculations={calculations}
         revisions={revisions}
-        weatherNames={Object.fromEntries(weather.map(({ id, name }) => [id, name]))}
+        weatherNames={weatherNames}
         zone={zone}
       />
     </WeatherDrop>
   )
 }
+
+/** Not drawn again while fields move. */
+const SteadyLists = memo(KeptLists)
 
 const has = (list: readonly Weather[], one: Weather) => list.some(({ id }) => id === one.id)
 

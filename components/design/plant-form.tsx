@@ -97,6 +97,8 @@ export function PlantForm(props: PlantFormProps) {
   )
 }
 
+const none: readonly DesignCheck[] = []
+
 function Fields({
   fields,
   draft,
@@ -112,7 +114,7 @@ function Fields({
         field={field}
         text={textOf(draft, field)}
         error={errors[field.path]}
-        checks={own}
+        checks={own.length > 0 ? own : none}
         onType={onType}
       />
     )

@@ -1,5 +1,6 @@
 'use client'
 
+import { memo } from 'react'
 import { figure } from '@/components/chart/scale'
 import { FileDrop, type FileInHand } from '@/components/ui/file-drop'
 import { SelectField } from '@/components/ui/text-fields'
@@ -66,7 +67,7 @@ export function WeatherPanel(props: WeatherPanelProps) {
   )
 }
 
-function WeatherReport({ weather }: { weather: Weather }) {
+const WeatherReport = memo(function WeatherReport({ weather }: { weather: Weather }) {
   const { meta, report } = weather
   const { annual, missingHours, closure } = report
   const rows = [
@@ -125,4 +126,4 @@ function WeatherReport({ weather }: { weather: Weather }) {
       )}
     </div>
   )
-}
+})

@@ -46,8 +46,8 @@ describe('a design', () => {
     const wrong = changed({ strings: 0, powerFactorAtPoi: 1.2, acLossFraction: 2 })
     const paths = designBodySchema.safeParse(wrong).error?.issues.map((one) => one.path.join('.'))
     expect(paths).toEqual(expect.arrayContaining(['strings', 'powerFactorAtPoi', 'acLossFraction']))
-    const module = { ...juniper.module, vmpV: 52 }
-    const crossed = designBodySchema.safeParse(changed({ module })).error?.issues[0]
+    const sheet = { ...juniper.module, vmpV: 52 }
+    const crossed = designBodySchema.safeParse(changed({ module: sheet })).error?.issues[0]
     expect(crossed?.path).toEqual(['module', 'vmpV'])
     expect(crossed?.message).toContain('below the open-circuit voltage, 51.6 V')
   })

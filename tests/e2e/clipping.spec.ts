@@ -1,0 +1,146 @@
+import { randomUUID } from 'node:crypto'
+import type { Page } from '@playwright/test'
+import { bodyOf, ownName, readApplication, send, startApplication } from './applications'
+import { expect, test } from './fixtures'
+import { demoDesigns, demoWeather } from '@/db/demo/designs'
+import { figuresOf } from '@/lib/domain/plant/design'
+import { api, routes } from '@/lib/routes'
+import type { Weather } from '@/lib/schemas/weather'
+import { synthetic, tmy3Lines } from '@/tests/unit/plant/weather-texts'
+
+const design = demoDesigns[0]!.revisions.at(-1)!.body
+
+/** An application of its own with a design on a synthetic year; gives its id. */
+async function designedApplication(developer: Page, engineer: Page, name: string): Promise<string> {
+  const id = await startApplication(developer, name)
+  const { project } = await readApplication(engineer, id)
+  const kept = await send(engineer, api.syntheticWeather(), demoWeather.mountain)
+  const weather = await bodyOf<Weather>(kept)
+  const revision = { id: randomUUID(), baseNo: 0, body: design, weatherId: weather.id }
+  await bodyOf(await send(engineer, api.projectDesign(project.id), revision))
+  return id
+}
+
+interface Watch {
+  /** Run number and array over export limit, each time figures were shown. */
+  shown: { seq: number; ratio: number }[]
+  longTasksMs: number[]
+}
+
+/** Notes every result that the page shows and every task of its main thread over 50 ms. */
+async function watch(page: Page): Promise<void> {
+  await page.evaluate(() => {
+    const seen: Watch = { shown: [], longTasksMs: [] }
+    Object.assign(window, { seen })
+    new PerformanceObserver((list) => {
+      seen.longTasksMs.push(...list.getEntries().map((entry) => entry.duration))
+    }).observe({ type: 'longtask' })
+    const cells = [...document.querySelectorAll('dt')]
+    const ratio = cells.find((cell) => cell.textContent === 'Array over export limit')
+    const figures = document.querySelector('[data-run]')
+    if (!figures) throw new Error('No figures are shown yet.')
+    new MutationObserver(() => {
+      const seq = Number(figures.getAttribute('data-run'))
+      seen.shown.push({ seq, ratio: Number(ratio?.nextElementSibling?.textContent) })
+    }).observe(figures, { attributes: true, attributeFilter: ['data-run'] })
+  })
+}
+
+const seenOn = (page: Page) => page.evaluate(() => (window as unknown as { seen: Watch }).seen)
+
+const cell = (page: Page, caption: string) =>
+  page
+    .getByLabel('Clipping calculation')
+    .locator('div')
+    .filter({ has: page.getByText(caption, { exact: true }) })
+    .locator('dd')
+    .first()
+
+test('Fifty moves of a field in two seconds show their figures in order, and the page never stalls', async ({
+  pageOf,
+}) => {
+  const engineer = await pageOf('engineer')
+  const id = await designedApplication(await pageOf('developer'), engineer, ownName('Moves'))
+  await engineer.goto(routes.application(id, 'design'))
+  await expect(cell(engineer, 'Array over export limit')).toHaveText('1.30')
+  await watch(engineer)
+  const strings = engineer.getByRole('textbox', { name: 'Strings', exact: true })
+  const beganAt = performance.now()
+  for (let move = 0; move < 50; move++) await strings.press('ArrowUp', { delay: 25 })
+  expect(performance.now() - beganAt).toBeLessThan(10_000)
+  const { dcPerPoi } = figuresOf({ ...design, strings: design.strings + 50 })
+  await expect(strings).toHaveValue((design.strings + 50).toLocaleString('en-US'))
+  await expect(cell(engineer, 'Array over export limit')).toHaveText(dcPerPoi.toFixed(2))
+  const { shown, longTasksMs } = await seenOn(engineer)
+  const numbers = shown.map((one) => one.seq)
+  expect(numbers.length).toBeGreaterThan(5)
+  expect(numbers).toEqual([...new Set(numbers)].sort((a, b) => a - b))
+  const ratios = shown.map((one) => one.ratio)
+  expect(ratios).toEqual([...ratios].sort((a, b) => a - b))
+  expect(longTasksMs).toEqual([])
+})
+
+test('An engineer brings a station file, is told what is wrong with another, and freezes what the page shows', async ({
+  pageOf,
+}) => {
+  const engineer = await pageOf('engineer')
+  const id = await designedApplication(await pageOf('developer'), engineer, ownName('Freeze'))
+  await engineer.goto(routes.application(id, 'design'))
+  await expect(engineer.getByText('synthetic from monthly means, not measured')).toBeVisible()
+  const lines = tmy3Lines(synthetic())
+  const picker = engineer.locator('input[type=file]')
+  const drop = (name: string, text: string) =>
+    picker.setInputFiles({ name, mimeType: 'text/csv', buffer: Buffer.from(text) })
+
+  await drop('short.csv', lines.slice(0, -1).join('\n'))
+  await expect(engineer.getByText(/Refused, nothing kept: .*8,?759/).first()).toBeVisible()
+
+  await drop('station.csv', lines.join('\n'))
+  const weather = engineer.getByLabel('Weather', { exact: true })
+  await expect(weather.getByText('The clock agrees with the sun', { exact: false })).toBeVisible()
+  await expect(weather.getByText('8,760')).toBeVisible()
+  await expect(cell(engineer, 'Weather')).toContainText('Sorrel Wells')
+
+  const series = engineer.getByRole('textbox', { name: 'Modules in series' })
+  await series.fill('26')
+  await expect(engineer.getByText('1,505.9 V of 1,500 V, one too many')).toBeVisible()
+  await series.fill('24')
+  await expect(cell(engineer, 'Array over export limit')).toHaveText('1.25')
+  const figures = async () => ({
+    clipped: await cell(engineer, 'Clipped a year').textContent(),
+    energy: await cell(engineer, 'At the POI, a year').textContent(),
+  })
+  const live = await figures()
+
+  await engineer.getByLabel(/What changed since revision 1/).fill('One module fewer in series')
+  await engineer.getByRole('button', { name: 'Freeze as no. 1' }).click()
+  await expect(engineer).toHaveURL(/\/design\/calculations\/1$/)
+  await expect(engineer.getByText(/frozen .* by Tobin Arceneth/)).toBeVisible()
+  expect(await figures()).toEqual(live)
+  await expect(engineer.getByRole('textbox', { name: 'Modules in series' })).toHaveAttribute(
+    'readonly',
+    '',
+  )
+
+  await engineer.getByRole('link', { name: 'Back to the live plant' }).click()
+  await expect(engineer.getByRole('button', { name: 'Freeze as no. 2' })).toBeVisible()
+  await expect(engineer.getByRole('cell', { name: 'One module fewer in series' })).toBeVisible()
+})
+
+test('An executive moves a field and sees the figures follow, but has nothing to freeze with', async ({
+  pageOf,
+}) => {
+  const developer = await pageOf('developer')
+  const id = await designedApplication(developer, await pageOf('engineer'), ownName('Look'))
+  const executive = await pageOf('executive')
+  await executive.goto(routes.application(id, 'design'))
+  await expect(cell(executive, 'Array over export limit')).toHaveText('1.30')
+  await executive.getByRole('textbox', { name: 'Export limit at the POI' }).fill('40')
+  await expect(cell(executive, 'Array over export limit')).toHaveText('1.56')
+  await expect(executive.getByRole('button', { name: /Freeze/ })).toHaveCount(0)
+  const refused = await send(executive, api.calculations(id), {
+    id: randomUUID(),
+    designRevisionId: randomUUID(),
+  })
+  expect(refused.status()).toBe(403)
+})
