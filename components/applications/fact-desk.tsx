@@ -31,6 +31,7 @@ export function FactDeskProvider(props: { applicationId: string; children: React
         title={words?.title ?? ''}
         description={words?.description}
         width="wide"
+        holdsInput
         role={intent?.kind === 'withdrawn' ? 'alertdialog' : 'dialog'}
       >
         {intent && (

@@ -1,7 +1,7 @@
 'use client'
 
 import { useQuery } from '@tanstack/react-query'
-import { useState } from 'react'
+import { useEffect, useRef, useState } from 'react'
 import { intentWords, type FactIntent } from '@/components/applications/fact-intent'
 import { FactFields } from '@/components/applications/fact-form-fields'
 import { FactRefusal } from '@/components/applications/fact-refusal'
@@ -34,8 +34,12 @@ function LoadedForm(props: FactFormProps & { view: ApplicationView }) {
   const form = useFactForm(view, intent, onRecorded)
   const { call } = form
   const isWithdrawal = intent.kind === 'withdrawn'
+  const element = useRef<HTMLFormElement>(null)
+  useEffect(() => {
+    element.current?.querySelector<HTMLElement>('select, input, textarea')?.focus()
+  }, [])
   return (
-    <form onSubmit={call.onSubmit}>
+    <form ref={element} onSubmit={call.onSubmit}>
       <ErrorSummary errors={call.fields} />
       <FactRefusal
         problem={call.problem}
@@ -49,7 +53,6 @@ function LoadedForm(props: FactFormProps & { view: ApplicationView }) {
         {...form}
         isStepFixed={intent.kind === 'correction'}
         terms={view.terms}
-        onlyTerms={intent.terms}
         zone={view.operator.zone}
         todayOn={view.todayOn}
         errorOf={call.errorOf}
@@ -63,7 +66,9 @@ function LoadedForm(props: FactFormProps & { view: ApplicationView }) {
         />
       )}
       <div className="mt-4 flex flex-wrap justify-end gap-2.5">
-        {onCancel && <Button onClick={onCancel}>Keep as it is</Button>}
+        {onCancel && (
+          <Button onClick={onCancel}>{isWithdrawal ? 'Keep the request' : 'Cancel'}</Button>
+        )}
         <Button
           type="submit"
           look={isWithdrawal ? 'danger' : 'primary'}

@@ -1,5 +1,6 @@
 'use client'
 
+import { useState } from 'react'
 import { factWords } from '@/components/applications/fact-words'
 import { Button } from '@/components/ui/button'
 import type { ProblemError } from '@/lib/client/fetcher'
@@ -20,9 +21,12 @@ export function FactRefusal({ problem, view, seenSeq, onLoad }: FactRefusalProps
   return (
     <div role="alert" className="border-late bg-late-2 my-3 border-l-4 px-3.5 py-2.5 text-sm">
       <p className="text-late font-semibold">{headline(problem)}</p>
-      <p className="mt-1">{problem.detail ?? problem.message}</p>
+      {problem.status === 409 ? (
+        <Meanwhile problem={problem} view={view} seenSeq={seenSeq} onLoad={onLoad} />
+      ) : (
+        <p className="mt-1">{problem.detail ?? problem.message}</p>
+      )}
       {problem.status === 401 && <SignInAgain />}
-      {problem.status === 409 && <Meanwhile view={view} seenSeq={seenSeq} onLoad={onLoad} />}
     </div>
   )
 }
@@ -50,21 +54,34 @@ function SignInAgain() {
   )
 }
 
-function Meanwhile({ view, seenSeq, onLoad }: Omit<FactRefusalProps, 'problem'>) {
+interface MeanwhileProps extends FactRefusalProps {
+  problem: ProblemError
+}
+
+/** What was recorded since the form was opened; once that is loaded, the form can be sent again. */
+function Meanwhile({ problem, view, seenSeq, onLoad }: MeanwhileProps) {
+  const [wasLoaded, setLoaded] = useState(false)
   const newer = view.facts.filter((fact) => fact.seq > seenSeq)
   const ground = { zone: view.operator.zone, facts: view.facts, items: view.items }
+  if (wasLoaded && newer.length === 0)
+    return <p className="mt-1">The new state is loaded. Look it over, then press again.</p>
+  if (newer.length === 0) return <p className="mt-1">{problem.detail ?? problem.message}</p>
   return (
     <>
-      {newer.length > 0 && (
-        <ul className="mt-1.5 grid gap-0.5">
-          {newer.map((fact) => (
-            <li key={fact.id}>
-              {fact.recordedBy ?? 'A job'}: {factWords(fact, ground).title}
-            </li>
-          ))}
-        </ul>
-      )}
-      <Button className="mt-2.5" onClick={onLoad} busyLabel="Loading">
+      <p className="mt-1">Recorded since this form was opened:</p>
+      <ul className="mt-1 grid list-disc gap-0.5 pl-5">
+        {newer.map((fact) => (
+          <li key={fact.id}>
+            {factWords(fact, ground).title}, {fact.recordedBy ?? 'by a job'}
+          </li>
+        ))}
+      </ul>
+      <p className="mt-1">Yours was not saved and stays in the form.</p>
+      <Button
+        className="mt-2.5"
+        onClick={() => onLoad().then(() => setLoaded(true))}
+        busyLabel="Loading"
+      >
         Load the new state
       </Button>
     </>

@@ -1,7 +1,7 @@
 import { formatDollars } from '@/components/applications/money-words'
 import { termWords } from '@/components/applications/term-words'
 import type { Channel, FactBody, FactKind } from '@/lib/domain/clocks/facts'
-import { formatDate, formatHour, formatInstant } from '@/lib/domain/format-date'
+import { formatDate, formatInstant } from '@/lib/domain/format-date'
 import type { FactView } from '@/lib/schemas/application'
 
 export const channelWords: Record<Channel, string> = {
@@ -135,14 +135,4 @@ function dateWords(fact: FactView, zone: string): string[] {
 /** What concerns no step was not received: it counts from a day. */
 function receiptVerb(fact: FactView): string {
   return fact.step === null ? 'As of' : 'Received'
-}
-
-/** When a fact was recorded, as the reader's own zone has it: "Tue 1 Dec 2026, 9:40 am MT". */
-export function recordedWords(fact: FactView, zone: string): string {
-  return `${formatInstant(fact.recordedAt, zone)}`
-}
-
-/** The closing hour of a date, "5 pm MT"; nothing where the day has no hour. */
-export function hourWords(dueAt: string | null, zone: string): string {
-  return dueAt ? formatHour(dueAt, zone) : ''
 }

@@ -11,7 +11,7 @@ import { applicationQuery, useRecordFact } from '@/lib/client/applications'
 import { ProblemError } from '@/lib/client/fetcher'
 import { newId } from '@/lib/client/new-id'
 import { textOf, useFormCall } from '@/lib/client/use-form-call'
-import type { FactBody } from '@/lib/domain/clocks/facts'
+import type { FactBody, Terms } from '@/lib/domain/clocks/facts'
 import type { ApplicationView, FactView } from '@/lib/schemas/application'
 
 /**
@@ -41,7 +41,10 @@ export function useFactForm(
     const { input, faults } = factValuesOf((name) => textOf(values, name), ground)
     if (faults.length > 0)
       throw new ProblemError(422, 'invalid', 'Some fields need another look', faults)
-    const after = await record.mutateAsync(input)
+    const after = await record.mutateAsync(input).catch(async (error: unknown) => {
+      if (error instanceof ProblemError && error.status === 409) await readNewState()
+      throw error
+    })
     toast({
       title: `Recorded: ${newestTitle(after)}`,
       detail: movedWords(view.items, after.items, after.todayOn),
@@ -50,9 +53,13 @@ export function useFactForm(
     router.refresh()
   }
 
+  /** Undefined where it cannot be read: the form stays as it is then. */
+  const readNewState = () =>
+    client.fetchQuery({ ...applicationQuery(view.id), staleTime: 0 }).catch(() => undefined)
+
   async function loadNewState() {
-    const fresh = await client.fetchQuery({ ...applicationQuery(view.id), staleTime: 0 })
-    setSeq(fresh.seq)
+    const fresh = await readNewState()
+    if (fresh) setSeq(fresh.seq)
     router.refresh()
   }
 
@@ -64,7 +71,10 @@ export function useFactForm(
     choose: (change: Partial<typeof chosen>) => setChosen((before) => ({ ...before, ...change })),
     choices,
     choice,
-    fields: fieldsOf(kind, { choice, ...chosen }),
+    onlyTerms: intent.terms ?? termsIn(from),
+    fields: fieldsOf(kind, { choice, ...chosen }).filter(
+      (field) => !intent.terms || (field !== 'decision' && field !== 'effect'),
+    ),
     needsReason: asksWhy(kind, choice),
     call: useFormCall(send),
     seq,
@@ -84,6 +94,12 @@ function firstChosen(intent: FactIntent, from?: FactView) {
     obligation: from?.obligation ?? intent.obligation ?? '',
     decision: decided ?? (intent.kind === 'extension' ? 'granted' : ''),
   }
+}
+
+/** The terms a corrected fact states: its correction asks for the same ones. */
+function termsIn(from?: FactView): (keyof Terms)[] | undefined {
+  const keys = Object.keys((from?.body as FactBody | undefined)?.terms ?? {})
+  return keys.length === 0 ? undefined : (keys as (keyof Terms)[])
 }
 
 function newestTitle(view: ApplicationView): string {

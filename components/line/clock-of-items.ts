@@ -31,7 +31,8 @@ export function runningClockOf(
   const toOn = item && workingDueOf(item)
   if (!item?.startOn || !toOn) return undefined
   return {
-    fromOn: item.startOn,
+    // A backward count has no length from its start: what is left of it is drawn.
+    fromOn: isBackward(item) && todayOn < toOn ? todayOn : item.startOn,
     toOn,
     label: `${lengthWords(item, toOn, todayOn)}, ${leftWords(item, toOn, todayOn)}`,
     note: noteWords(item, items, todayOn),
@@ -42,7 +43,8 @@ export function runningClockOf(
 /** `30 calendar days`, as the derivation counts it; undefined for a date that was not counted. */
 export function countedLength(derivation: ClockSource['derivation']): string | undefined {
   const line = derivation.find((one) => one.kind === 'count')
-  return /^(?:at least )?\d+ (?:business day|calendar day|month|year)s?/.exec(line?.text ?? '')?.[0]
+  const found = /^(?:at least )?\d+ (?:business day|calendar day|month|year)s?/i
+  return found.exec(line?.text ?? '')?.[0].replace(/^A/, 'a')
 }
 
 function lengthWords(item: ClockSource, toOn: string, todayOn: string): string {
@@ -50,10 +52,22 @@ function lengthWords(item: ClockSource, toOn: string, todayOn: string): string {
   if (!length) return `since ${formatShortDate(item.startOn ?? toOn, todayOn)}`
   const counted = item.derivation.find((line) => line.kind === 'count')
   if (counted?.on !== undefined && counted.on < toOn) return `${length}, extended`
-  if (counted?.text.includes(`${length} before`)) return length
+  if (isBackward(item)) return `${length} before${bookedName(item)}`
   const start = item.derivation.find((line) => line.kind === 'start')?.text ?? ''
   if (start.includes(', received ')) return `${length} from receipt`
   return start.includes(', sent ') ? `${length} from sending` : length
+}
+
+function isBackward(item: ClockSource): boolean {
+  const text = item.derivation.find((line) => line.kind === 'count')?.text ?? ''
+  return /^[^,:]* before[,:]/.test(text)
+}
+
+/** The booked event that a backward count ends at. */
+function bookedName(item: ClockSource): string {
+  const line = item.derivation.findLast((one) => one.kind === 'start')
+  const name = /^(.+), booked for /.exec(line?.text ?? '')?.[1]
+  return name === undefined ? '' : ` the ${midSentence(name)}`
 }
 
 function leftWords(item: ClockSource, toOn: string, todayOn: string): string {

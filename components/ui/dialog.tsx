@@ -17,6 +17,8 @@ export interface DialogProps {
   width?: 'narrow' | 'wide'
   /** A dialog that asks before something is lost. */
   role?: 'dialog' | 'alertdialog'
+  /** It holds typed input: a stray press beside it does not close it. */
+  holdsInput?: boolean
 }
 
 /** A ruled box over the page, a sheet from below on phones. Keeps the focus, closes on Escape. */
@@ -29,6 +31,7 @@ export function Dialog({
   footer,
   width = 'narrow',
   role = 'dialog',
+  holdsInput = false,
 }: DialogProps) {
   const opener = useRef<Element | null>(null)
   return (
@@ -37,6 +40,7 @@ export function Dialog({
         <RadixDialog.Overlay className="fixed inset-0 z-40 bg-(--scrim)" />
         <RadixDialog.Content
           role={role}
+          onPointerDownOutside={(event) => holdsInput && event.preventDefault()}
           onOpenAutoFocus={() => {
             opener.current = document.activeElement
           }}

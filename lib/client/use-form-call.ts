@@ -26,9 +26,10 @@ export function useFormCall(
     if (isRunning.current) return
     isRunning.current = true
     setBusy(true)
-    setRefusal(undefined)
     try {
+      // What was refused stays in sight until the answer, so that nothing moves under the pointer.
       await send(new FormData(form), form)
+      setRefusal(undefined)
     } catch (error) {
       if (!(error instanceof ProblemError)) throw error
       setRefusal(error)

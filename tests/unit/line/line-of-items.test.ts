@@ -138,6 +138,18 @@ describe('the running clock in words', () => {
     expect(runningClockOf([extended], todayOn)?.label).toBe('30 calendar days, extended, 17 left')
   })
 
+  it('draws what is left of a count back from a booked day, and names that day', () => {
+    const derivation = [
+      { kind: 'start', text: 'Starts from: Sign, received Thu 26 Feb 2026.' },
+      { kind: 'start', text: 'Witness test, booked for Fri 18 Dec 2026.' },
+      { kind: 'count', on: '2026-12-10', text: 'At least 5 business days before, calendar of X.' },
+    ]
+    expect(runningClockOf([item({ derivation, startOn: '2026-02-26' })], todayOn)).toMatchObject({
+      fromOn: todayOn,
+      label: 'at least 5 business days before the witness test, 7 left',
+    })
+  })
+
   it('draws none where nothing dated runs', () => {
     expect(runningClockOf([item({ status: 'done' })], todayOn)).toBeUndefined()
     expect(runningClockOf([item({ dueOn: null, dueAt: null })], todayOn)).toBeUndefined()

@@ -10,6 +10,7 @@ const tabs: readonly { tab: ApplicationTab; label: string }[] = [
   { tab: 'sequence', label: 'Sequence' },
   { tab: 'clocks', label: 'Clocks' },
   { tab: 'design', label: 'Design' },
+  { tab: 'exhibits', label: 'Exhibits' },
   { tab: 'correspondence', label: 'Correspondence' },
   { tab: 'record', label: 'Record' },
 ]

@@ -17,7 +17,10 @@ export function ApplicationMenu({ standing, requestNo }: ApplicationMenuProps) {
   return (
     <div data-screen-only className="flex shrink-0 flex-wrap gap-2.5 max-sm:pt-4">
       {!isWithdrawn && (
-        <Button look="primary" onClick={() => open({ kind: 'happened' })}>
+        <Button
+          look={standing === 'filed' ? 'primary' : 'plain'}
+          onClick={() => open({ kind: 'happened' })}
+        >
           Record an event
         </Button>
       )}

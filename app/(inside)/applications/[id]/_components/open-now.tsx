@@ -78,8 +78,11 @@ function Running({ item, view, mayRecord }: RowProps) {
   const parts = partsOf(view, item)
   const by = dueWords(item, view.todayOn)
   const name = item.short ?? item.title
+  const whose = isOurs(item) ? '' : 'They owe: '
   const heading =
-    parts.length > 1 ? `${name}, ${allWords(parts.length)} by ${by}` : `${name} by ${by}`
+    parts.length > 1
+      ? `${whose}${name}, ${allWords(parts.length)} by ${by}`
+      : `${whose}${name} by ${by}`
   return (
     <section aria-labelledby="running">
       <h2 id="running" className="border-rule border-b pb-2">
@@ -198,7 +201,8 @@ function showsStart(item: ItemView, todayOn: string): boolean {
 
 /** Who holds it, by when, and what of it is there: the small print of a row. */
 function underWords(item: ItemView, view: ApplicationView): string {
-  const holder = item.owner?.name ?? (isOurs(item) ? item.ownerRole : null)
+  const holder = isOurs(item) ? (item.owner?.name ?? item.ownerRole) : null
+  const follower = isOurs(item) ? undefined : item.owner?.name
   const due = item.obligation === '' ? dueWords(item, view.todayOn) : null
   const money =
     item.moneyTargetMinor === null
@@ -208,6 +212,7 @@ function underWords(item: ItemView, view: ApplicationView): string {
     capitalized(holder ?? whoseWords(item.party)),
     due && `due ${due}`,
     statedWords(item, view.todayOn),
+    follower && `${follower} follows it`,
     money,
     item.startBy && item.status === 'open' && !showsStart(item, view.todayOn)
       ? `start by ${formatDate(item.startBy, view.todayOn)}`
@@ -221,8 +226,9 @@ function underWords(item: ItemView, view: ApplicationView): string {
 
 function statedWords(item: ItemView, todayOn: string): string | null {
   if (!item.statedDueOn || item.statedDueOn === item.dueOn || item.obligation !== '') return null
-  const counted = item.dueOn ? `, our count ${formatDate(item.dueOn, todayOn)}` : ''
-  return `they say ${formatDate(item.statedDueOn, todayOn)}${counted}`
+  if (!item.dueOn) return 'the date as they state it'
+  const counted = formatDate(item.dueOn, todayOn)
+  return `they say ${formatDate(item.statedDueOn, todayOn)}, our count ${counted}`
 }
 
 function capitalized(text: string): string {

@@ -130,6 +130,7 @@ function ClockRows({ item, table }: { item: ItemView; table: ClocksTableProps })
 }
 
 const cell = 'border-rule border-b py-2.5 pr-4 align-middle last:pr-0 max-sm:border-0 max-sm:p-0'
+const aside = 'max-sm:col-start-2 max-sm:row-start-1 max-sm:justify-self-end max-sm:text-right'
 const line =
   'max-sm:col-span-2 max-sm:flex max-sm:items-baseline max-sm:justify-between max-sm:gap-4'
 
@@ -138,6 +139,7 @@ function ClockRow(props: { item: ItemView; table: ClocksTableProps; isOpen: bool
   const { view, showsAll } = table
   const key = clockKey(item)
   const state = stateWords(item)
+  const hasFigure = leftTone(item) !== null
   const isAhead = item.status === 'waiting' || item.status === 'not_needed'
   const href = routes.application(view.id, 'clocks', {
     open: isOpen ? undefined : key,
@@ -165,12 +167,12 @@ function ClockRow(props: { item: ItemView; table: ClocksTableProps; isOpen: bool
           {item.instance > 1 && `, round ${item.instance}`}
         </Link>
       </td>
-      <td role="cell" className={clsx(cell, line)}>
+      <td role="cell" className={clsx(cell, isAhead ? 'max-sm:hidden' : line)}>
         <Caption>Whose</Caption>
         {whoseWords(item.party)}
       </td>
-      <td role="cell" className={clsx(cell, line)}>
-        <Caption>State</Caption>
+      <td role="cell" className={clsx(cell, hasFigure ? line : aside)}>
+        {hasFigure && <Caption>State</Caption>}
         <StateWord tone={state.tone}>{state.text}</StateWord>
       </td>
       <DateCell
@@ -178,10 +180,10 @@ function ClockRow(props: { item: ItemView; table: ClocksTableProps; isOpen: bool
         text={item.startOn && formatShortDate(item.startOn, view.todayOn)}
       />
       <DateCell caption="Due" text={dueText(item, view.todayOn)} />
-      <td role="cell" className={clsx(cell, 'max-sm:col-start-2 max-sm:row-start-1')}>
+      <td role="cell" className={clsx(cell, hasFigure ? aside : 'max-sm:hidden')}>
         <Left item={item} />
       </td>
-      <DateCell caption="Done" text={doneText(item, view)} />
+      <DoneCell item={item} view={view} />
     </tr>
   )
 }
@@ -191,10 +193,23 @@ function dueText(item: ItemView, todayOn: string): string | null {
   return due && item.provisional ? `${due}, provisional` : due
 }
 
-function doneText(item: ItemView, view: ApplicationView): string | null {
-  if (item.status !== 'done' && item.status !== 'waived') return null
+function DoneCell({ item, view }: { item: ItemView; view: ApplicationView }) {
+  const isDone = item.status === 'done' || item.status === 'waived'
   const date = item.doneOn ? formatShortDate(item.doneOn, view.todayOn) : 'date not known'
-  return [date, outcomeOf(item, view)].filter(Boolean).join(', ')
+  const outcome = outcomeOf(item, view)
+  return (
+    <td role="cell" className={clsx(cell, isDone ? line : 'max-sm:hidden')}>
+      {isDone && (
+        <>
+          <Caption>Done</Caption>
+          <span className="max-sm:text-right">
+            <span className="mono">{date}</span>
+            {outcome && <span className="text-ink-2 block text-sm">{outcome}</span>}
+          </span>
+        </>
+      )}
+    </td>
+  )
 }
 
 /** The outcome in the procedure's words, where the step can end in more than one way. */

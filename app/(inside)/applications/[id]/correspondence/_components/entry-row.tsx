@@ -23,7 +23,10 @@ export function EntryRow({ entry, applicationId, now, onReply, onRevise }: Entry
   const today = civilDateAt(now, entry.zone)
   const others = entry.applications.filter((one) => one.applicationId !== applicationId)
   return (
-    <li className="border-rule grid gap-x-6 gap-y-1 border-b py-3.5 sm:grid-cols-[6.5rem_minmax(0,1fr)_auto]">
+    <li
+      id={`entry-${entry.id}`}
+      className="border-rule target:bg-sheet grid scroll-mt-6 gap-x-6 gap-y-1 border-b py-3.5 sm:grid-cols-[6.5rem_minmax(0,1fr)_auto]"
+    >
       <p className="mono" title={`${formatDate(entry.on)}, ${formatHour(entry.at, entry.zone)}`}>
         {formatShortDate(entry.on, today)}
         <span className="text-ink-2 block text-sm max-sm:ml-2 max-sm:inline">
