@@ -72,8 +72,9 @@ function lookups(
   slots: ReadonlyMap<string, Fact[]>,
   facts: readonly Fact[],
 ): Omit<FactIndex, 'facts' | 'stops' | 'withdrawn' | 'stranded'> {
+  const kinds = new Set<string>(facts.map((fact) => fact.kind))
   const find = (kind: string, step: string, instance: number, obligation?: string) =>
-    slots.get(slotOf(kind, step, instance, obligation)) ?? []
+    (kinds.has(kind) && slots.get(slotOf(kind, step, instance, obligation))) || []
   const takenOver = (step: string, instance: number) => find('taken_over', step, instance).at(-1)
   const doneBefore = (step: string, instance: number) => {
     const fact = takenOver(step, instance)

@@ -29,7 +29,10 @@ function markDate(fact: Fact): CivilDate {
   return eventDate(fact) ?? fact.recordedAt.slice(0, 10)
 }
 
-/** Stops, resumptions, withdrawals and reinstatements by the day they hold from. */
+/**
+ * Stops, resumptions, withdrawals and reinstatements by the day they hold from. On one day the
+ * stop comes first: the reading that leaves less time.
+ */
 export function marksOf(facts: readonly Fact[]): Fact[] {
   return facts
     .filter((fact) => rank[fact.kind] !== undefined)

@@ -40,6 +40,11 @@ describe('a stop and a resumption', () => {
     expect(reviewed(resume('2026-06-08'), stop('2026-06-04')).dueOn).toBe('2026-06-26')
   })
 
+  it('of one day end that day, so that a clock is never thought stopped by the order of records', () => {
+    const item = reviewed(resume('2026-06-04'), stop('2026-06-04'))
+    expect([item.status, item.dueOn]).toEqual(['open', '2026-06-24'])
+  })
+
   it('a stop that lasts leaves the clock stopped and its date provisional', () => {
     const item = reviewed(stop('2026-06-04'))
     expect([item.status, item.dueOn, item.provisional]).toEqual(['stopped', '2026-06-23', true])
