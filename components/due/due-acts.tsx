@@ -17,6 +17,9 @@ interface DueActsProps {
   todayOn: string
 }
 
+// Rows are many and their acts few: quieter than a button elsewhere.
+const small = 'text-sm! font-medium!'
+
 /** Acknowledge and assign: side by side in a table, behind one word on a phone. */
 export function DueActs({ clock, may, todayOn }: DueActsProps) {
   const [isAcknowledging, setAcknowledging] = useState(false)
@@ -26,10 +29,11 @@ export function DueActs({ clock, may, todayOn }: DueActsProps) {
   const people = <PeopleChoices ownerId={clock.ownerId} onChoose={assign} />
   return (
     <>
-      <div className="-my-1 flex justify-end gap-1.5 whitespace-nowrap max-sm:hidden">
+      <div className="-my-1 -mr-1.5 flex justify-end gap-1.5 whitespace-nowrap max-sm:hidden">
         {mayAcknowledge && (
           <Button
             look="quiet"
+            className={small}
             aria-label={`Acknowledge: ${of}`}
             onClick={() => setAcknowledging(true)}
           >
@@ -39,7 +43,7 @@ export function DueActs({ clock, may, todayOn }: DueActsProps) {
         {may.assign && (
           <Menu
             trigger={
-              <Button look="quiet" busy={busy} aria-label={`Assign: ${of}`}>
+              <Button look="quiet" className={small} busy={busy} aria-label={`Assign: ${of}`}>
                 Assign
               </Button>
             }
@@ -48,10 +52,10 @@ export function DueActs({ clock, may, todayOn }: DueActsProps) {
           </Menu>
         )}
       </div>
-      <div className="-my-2 sm:hidden">
+      <div className="-my-2 -mr-1.5 sm:hidden">
         <Menu
           trigger={
-            <Button look="quiet" busy={busy} aria-label={`More for ${of}`}>
+            <Button look="quiet" className={small} busy={busy} aria-label={`More for ${of}`}>
               More
             </Button>
           }

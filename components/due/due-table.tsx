@@ -1,15 +1,16 @@
 import { clsx } from 'clsx'
 import Link from 'next/link'
+import type { ReactNode } from 'react'
 import { clockKey, leftTone } from '@/components/applications/clock-words'
 import { DueActs } from '@/components/due/due-acts'
 import {
-  closingHourWords,
   dueLeft,
   dueLine,
   type DueScope,
   dueTitle,
   groupedRows,
   inHandWords,
+  underDate,
 } from '@/components/due/due-text'
 import { LeftFigure } from '@/components/ui/left-figure'
 import { RowOpener } from '@/components/ui/row-opener'
@@ -41,28 +42,29 @@ export function DueTable({ due, scope, may }: DueTableProps) {
     >
       <caption className="sr-only">Owed, nearest first</caption>
       <Columns hasActs={hasActs} />
-      <thead role="rowgroup" className="sr-only">
+      <thead role="rowgroup" className="max-sm:sr-only">
         <tr role="row">
           {headers.map((header) => (
-            <th key={header} role="columnheader" scope="col">
-              {header}
-            </th>
+            <HeaderCell key={header}>{header}</HeaderCell>
           ))}
           {hasActs && (
-            <th role="columnheader" scope="col">
-              Act
-            </th>
+            <HeaderCell>
+              <span className="sr-only">Act</span>
+            </HeaderCell>
           )}
         </tr>
       </thead>
-      {groupedRows(due.rows, scope).map((group) => (
+      {groupedRows(due.rows, scope).map((group, index) => (
         <RowOpener key={group.key}>
           <tr role="row" className="max-sm:block">
             <th
               role="rowheader"
               scope="rowgroup"
               colSpan={hasActs ? 6 : 5}
-              className="border-rule border-b pt-6 pb-2 text-left max-sm:block"
+              className={clsx(
+                'border-rule border-b pb-2 text-left max-sm:block',
+                index === 0 ? 'pt-4 max-sm:pt-0' : 'pt-7',
+              )}
             >
               <h2 className="text-[1rem]">{group.heading}</h2>
             </th>
@@ -73,6 +75,18 @@ export function DueTable({ due, scope, may }: DueTableProps) {
         </RowOpener>
       ))}
     </table>
+  )
+}
+
+function HeaderCell({ children }: { children: ReactNode }) {
+  return (
+    <th
+      role="columnheader"
+      scope="col"
+      className="border-ink bg-film text-th text-ink-2 sticky top-0 z-[1] border-b-[1.5px] py-2 pr-5 text-left font-medium font-stretch-[86%]"
+    >
+      {children}
+    </th>
   )
 }
 
@@ -93,7 +107,7 @@ function rowKeyOf(row: DueRow): string {
   return `${row.applicationId}/${clockKey(row)}/${row.rowKind}`
 }
 
-const cell = 'border-rule border-b py-3 pr-5 align-top max-sm:border-0 max-sm:p-0'
+const cell = 'border-rule border-b py-3 align-top max-sm:border-0 max-sm:p-0 sm:not-last:pr-5'
 
 function Row({ row, todayOn, may }: { row: DueRow; todayOn: string; may: MayAct }) {
   const inHand = inHandWords(row, todayOn)
@@ -108,8 +122,8 @@ function Row({ row, todayOn, may }: { row: DueRow; todayOn: string; may: MayAct 
       )}
     >
       <td role="cell" className={cell}>
-        <span className="mono block whitespace-nowrap">{formatDate(row.on, todayOn)}</span>
-        <span className="cap block">{closingHourWords(row)}</span>
+        <span className="mono block whitespace-nowrap">{formatDate(row.on, row.on)}</span>
+        <span className="cap block">{underDate(row, todayOn)}</span>
       </td>
       <td role="cell" className={cell}>
         <What row={row} todayOn={todayOn} inHand={inHand} />
@@ -129,7 +143,7 @@ function Row({ row, todayOn, may }: { row: DueRow; todayOn: string; may: MayAct 
         <span className="text-sm">{row.owner?.name ?? roleWords(row)}</span>
       </td>
       {(may.acknowledge || may.assign) && (
-        <td role="cell" className={clsx(cell, 'pr-0 text-right')} data-screen-only>
+        <td role="cell" className={clsx(cell, 'text-right')} data-screen-only>
           <DueActs clock={clockOf(row)} may={may} todayOn={todayOn} />
         </td>
       )}

@@ -18,6 +18,13 @@ export function closingHourWords(row: DueRow): string | null {
   return hourOf(row)
 }
 
+/** What stands small under a row's date: a year that is not this one, and the closing hour. */
+export function underDate(row: DueRow, todayOn: string): string {
+  const year = row.on.slice(0, 4)
+  const words = [year === todayOn.slice(0, 4) ? null : year, closingHourWords(row)]
+  return words.filter(Boolean).join(', ')
+}
+
 function hourOf(row: DueRow): string | null {
   const due = workingDue(row)
   if (!due?.dueAt || civilDateAt(due.dueAt, row.zone) !== due.dueOn) return null

@@ -1,6 +1,5 @@
 import { dueWords } from '@/components/applications/clock-words'
 import { formatShortDate } from '@/lib/domain/format-date'
-import { workingDue } from '@/lib/domain/obligations'
 
 interface Dated {
   dueOn: string | null
@@ -12,12 +11,6 @@ interface Dated {
 /** The title of a step with its round: "Cure the deficiency, round 2". */
 export function titleWithRound(of: { title: string; instance: number }): string {
   return of.instance > 1 ? `${of.title}, round ${of.instance}` : of.title
-}
-
-/** "Thu 3 Dec, 4 pm CT": the date worked to with its closing hour; null without a date. */
-export function workingDateWords(of: Dated, todayOn: string): string | null {
-  const due = workingDue(of)
-  return due && dueWords({ ...due, statedDueOn: null, zone: of.zone }, todayOn)
 }
 
 /**
@@ -34,6 +27,6 @@ export function otherDateWords(of: Dated, todayOn: string): string | null {
 
 /** "Thu 3 Dec, 4 pm CT · they say 4 Dec", or "no date" for a step that waits for its start. */
 export function nextDateWords(of: Dated, todayOn: string): string {
-  const words = [workingDateWords(of, todayOn), otherDateWords(of, todayOn)].filter(Boolean)
+  const words = [dueWords(of, todayOn), otherDateWords(of, todayOn)].filter(Boolean)
   return words.length > 0 ? words.join(' · ') : 'no date'
 }

@@ -41,7 +41,9 @@ const columns: readonly Column<PipelineRow>[] = [
     phone: 'hide',
     cell: (row) => (
       <>
-        <span className="mono block whitespace-nowrap">{row.requestNo ?? 'no number'}</span>
+        <span className="mono block whitespace-nowrap">
+          {row.requestNo ?? (row.standing === 'preparing' ? 'draft' : 'no number')}
+        </span>
         <span className="cap block">{row.poi}</span>
       </>
     ),
@@ -68,7 +70,7 @@ const columns: readonly Column<PipelineRow>[] = [
     key: 'line',
     header: 'Sequence',
     phone: 'bare',
-    className: 'max-sm:order-1',
+    className: 'max-sm:order-1 lg:w-[16.5rem]',
     cell: (row) => (
       <StepLineSmall
         steps={lineModelOf(row.line, row.todayOn).steps}
@@ -84,7 +86,13 @@ const columns: readonly Column<PipelineRow>[] = [
     phone: 'bare',
     cell: (row) => <NextClock row={row} />,
   },
-  { key: 'left', header: 'Left', phone: 'aside', cell: (row) => <Left row={row} /> },
+  {
+    key: 'left',
+    header: 'Left',
+    phone: 'aside',
+    className: 'lg:w-40',
+    cell: (row) => <Left row={row} />,
+  },
 ]
 
 function Project({ row }: { row: PipelineRow }) {

@@ -2,6 +2,7 @@ import { and, eq, inArray } from 'drizzle-orm'
 import { applications, applicationStates, obligations, projects } from '@/db/schema/applications'
 import { addDays, weekdayOf } from '@/lib/domain/clocks/civil-date'
 import { startStanding, type Standing } from '@/lib/domain/clocks/standing'
+import { workingDue } from '@/lib/domain/clocks/working-due'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import type { Due, DueFilter, DueRow } from '@/lib/schemas/application'
 import { authorize, personOf, type Context } from '@/lib/services/context'
@@ -66,7 +67,7 @@ async function dueRows(
       const organizationId = own.operator.id
       const left = () => startStanding(item.startBy!, item.zone, ctx.now.toISOString(), calendar)
       const due =
-        item.obligation === '' && (item.dueOn ?? item.statedDueOn)
+        item.obligation === '' && workingDue(item)
           ? [{ row: dueRow(base, todayOn), organizationId }]
           : []
       const start =
@@ -81,7 +82,7 @@ async function dueRows(
 type Base = Omit<DueRow, 'rowKind' | 'on' | 'group'>
 
 function dueRow(base: Base, todayOn: string): DueRow {
-  const on = earliestOf(base.dueOn, base.statedDueOn)
+  const on = workingDue(base)!
   const missed = base.standing.state === 'missed' || base.standing.state === 'theirs_late'
   return { ...base, rowKind: 'due', on, group: missed ? 'missed' : groupOf(on, todayOn) }
 }
@@ -90,11 +91,6 @@ function dueRow(base: Base, todayOn: string): DueRow {
 function startRow(base: Base, todayOn: string, left: () => Standing): DueRow {
   const on = base.startBy!
   return { ...base, rowKind: 'start_by', on, standing: left(), group: groupOf(on, todayOn) }
-}
-
-function earliestOf(a: string | null, b: string | null): string {
-  if (a && b) return a < b ? a : b
-  return (a ?? b)!
 }
 
 /** Weeks run Monday to Sunday, as a reader's week does. */

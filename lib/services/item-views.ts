@@ -3,6 +3,7 @@ import { acknowledgements, assignments, obligations } from '@/db/schema/applicat
 import { people } from '@/db/schema/people'
 import type { Db, Tx } from '@/db/client'
 import { standing } from '@/lib/domain/clocks/standing'
+import { workingDue } from '@/lib/domain/clocks/working-due'
 import type { StepParty } from '@/lib/domain/clocks/procedure'
 import type { ItemView } from '@/lib/schemas/application'
 import type { ApplicationParties, OrganizationParty } from '@/lib/services/parties'
@@ -58,19 +59,13 @@ export async function holdersOf(db: Db | Tx, applicationIds: string[]): Promise<
           one.step === row.step &&
           one.instance === row.instance &&
           one.obligation === row.obligation &&
-          one.dueOn === earlierOf(row.dueOn, row.statedDueOn),
+          one.dueOn === workingDue(row),
       )
       if (!found) return null
       const { reason, untilOn, recordedAt } = found.acknowledgement
-      return { by: found.name, reason, untilOn, at: recordedAt.toISOString() }
+      return { by: found.name, reason, untilOn: untilOn!, at: recordedAt.toISOString() }
     },
   }
-}
-
-/** An acknowledgment holds for the date that was worked to: the earlier of counted and stated. */
-function earlierOf(a: string | null, b: string | null): string | null {
-  if (!a || !b) return a ?? b
-  return a < b ? a : b
 }
 
 /** An obligation as it stands at `now`. */

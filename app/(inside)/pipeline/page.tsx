@@ -39,7 +39,9 @@ export default async function PipelinePage({ searchParams }: PipelinePageProps) 
         <>
           <TotalsBlock totals={totals} />
           <PipelineFilters organizations={organizations} shown={items.length} />
-          <PipelineTable rows={items} filter={filter} empty={empty} />
+          <div className="max-sm:border-ink mt-3 max-sm:border-t-[1.5px]">
+            <PipelineTable rows={items} filter={filter} empty={empty} />
+          </div>
           <p className="cap mt-3">
             Round contact: ours. Square: theirs. Bar: a gate, several obligations by one date.
             Raised blade: open. Copper: closed. Shows paperwork, not the state of equipment.
