@@ -87,6 +87,7 @@ test('An engineer brings a station file, is told what is wrong with another, and
   const id = await designedApplication(await pageOf('developer'), engineer, ownName('Freeze'))
   await engineer.goto(routes.application(id, 'design'))
   await expect(engineer.getByText('synthetic from monthly means, not measured')).toBeVisible()
+  await expect(cell(engineer, 'Array over export limit')).toHaveText('1.30')
   const lines = tmy3Lines(synthetic())
   const picker = engineer.locator('input[type=file]')
   const drop = (name: string, text: string) =>
