@@ -40,6 +40,11 @@ export const routes = {
       tab === 'sequence' ? `/applications/${part(id)}` : `/applications/${part(id)}/${tab}`,
       filter,
     ),
+  /** The count of one clock, opened in the list of its application. */
+  clock: (id: string, step: string, instance: number) => {
+    const key = `${step}~${instance}`
+    return `${withQuery(`/applications/${part(id)}/clocks`, { open: key })}#clock-${key}`
+  },
   newFact: (id: string, filter?: Filter) =>
     withQuery(`/applications/${part(id)}/record-event`, filter),
   calculation: (applicationId: string, no: number) =>
@@ -80,6 +85,9 @@ export const api = {
   milestones: (applicationId: string) => `/api/applications/${part(applicationId)}/milestones`,
   exhibits: (applicationId: string) => `/api/applications/${part(applicationId)}/exhibits`,
   exhibitDocument: (id: string) => `/api/exhibits/${part(id)}/document`,
+  checkExhibit: (id: string) => `/api/exhibits/${part(id)}/check`,
+  issueExhibit: (id: string) => `/api/exhibits/${part(id)}/issue`,
+  makeExhibit: (id: string) => `/api/exhibits/${part(id)}/make`,
   groupFacts: (groupId: string) => `/api/study-groups/${part(groupId)}/facts`,
   obligations: (filter?: Filter) => withQuery('/api/obligations', filter),
   acknowledgements: () => '/api/acknowledgements',

@@ -157,7 +157,7 @@ function What({ row, todayOn, inHand }: { row: DueRow; todayOn: string; inHand: 
     <>
       <Link
         data-row-link
-        href={routes.application(row.applicationId, 'clocks', { clock: clockKey(row) })}
+        href={routes.clock(row.applicationId, row.step, row.instance)}
         className="text-lg font-semibold no-underline hover:underline"
       >
         {dueTitle(row)}

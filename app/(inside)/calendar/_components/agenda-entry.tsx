@@ -11,7 +11,7 @@ import { routes } from '@/lib/routes'
 export function AgendaEntry({ event: { event } }: EventProps<WidgetEntry>) {
   return (
     <Link
-      href={routes.application(event.applicationId, 'clocks', { step: event.step })}
+      href={routes.clock(event.applicationId, event.step, event.instance)}
       className="flex gap-2"
       onClick={(click) => click.stopPropagation()}
     >

@@ -99,7 +99,7 @@ export function CalendarView({ on, view, filter, answer }: CalendarViewProps) {
           onNavigate={(date) => go({ on: civilOfDate(date) })}
           onView={(next) => go({ view: next })}
           onSelectEvent={({ event }) =>
-            router.push(routes.application(event.applicationId, 'clocks', { step: event.step }))
+            router.push(routes.clock(event.applicationId, event.step, event.instance))
           }
           toolbar={false}
           showAllEvents

@@ -9,7 +9,7 @@ import { routes } from '@/lib/routes'
 export function MonthEntry({ event: { event } }: EventProps<WidgetEntry>) {
   return (
     <Link
-      href={routes.application(event.applicationId, 'clocks', { step: event.step })}
+      href={routes.clock(event.applicationId, event.step, event.instance)}
       className="flex gap-1.5"
       onClick={(click) => click.stopPropagation()}
     >
