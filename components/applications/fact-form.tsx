@@ -36,7 +36,11 @@ function LoadedForm(props: FactFormProps & { view: ApplicationView }) {
   const isWithdrawal = intent.kind === 'withdrawn'
   const element = useRef<HTMLFormElement>(null)
   useEffect(() => {
-    element.current?.querySelector<HTMLElement>('select, input, textarea')?.focus()
+    // A frame later: the dialog first notes what opened it, to give the focus back on closing.
+    const frame = requestAnimationFrame(() =>
+      element.current?.querySelector<HTMLElement>('select, input, textarea')?.focus(),
+    )
+    return () => cancelAnimationFrame(frame)
   }, [])
   return (
     <form ref={element} onSubmit={call.onSubmit}>

@@ -118,7 +118,8 @@ function changeWords(body: FactBody): string {
   if (body.decision === 'refused') return 'Change refused'
   const keys = Object.keys(body.terms ?? {})
   if (keys.length === 1 && keys[0] === 'requestNo') return 'Request number assigned'
-  return body.decision === 'granted' ? 'Change granted' : 'Terms of the request'
+  if (body.decision === 'granted') return 'Change granted'
+  return body.procedureRevisionId ? 'Terms of the request' : 'Terms changed'
 }
 
 function dateWords(fact: FactView, zone: string): string[] {

@@ -130,7 +130,7 @@ function Row({ item, view, mayRecord }: RowProps) {
   const round = item.instance > 1 ? `, round ${item.instance}` : ''
   return (
     <li className="border-rule grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-5 gap-y-1 border-b py-3 sm:grid-cols-[minmax(0,1fr)_7rem_auto]">
-      <div className={clsx('min-w-0', isPart && 'pl-5')}>
+      <div className={clsx('min-w-0 max-sm:row-span-2', isPart && 'pl-5')}>
         <p className="font-semibold">
           <Link href={clockHref(view, item)} className="no-underline hover:underline">
             {item.title}
@@ -144,7 +144,7 @@ function Row({ item, view, mayRecord }: RowProps) {
         <Left item={item} todayOn={view.todayOn} isDone={isDone} />
       </div>
       {mayRecord && !isDone ? (
-        <span className="max-sm:col-span-2 sm:w-20 sm:text-right">
+        <span className="text-right max-sm:col-start-2 sm:w-20">
           <FactButton
             label={`Record: ${item.title}`}
             intent={{

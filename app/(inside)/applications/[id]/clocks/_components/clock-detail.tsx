@@ -86,6 +86,7 @@ function Parts({ item, view, may, people }: ClockDetailProps) {
 function partWords(part: ItemView, todayOn: string): string {
   return [
     stateWords(part).text,
+    part.owner?.name ?? part.ownerRole,
     part.startBy && part.status === 'open' && `start by ${formatDate(part.startBy, todayOn)}`,
     part.moneyTargetMinor !== null &&
       `${formatDollars(part.moneyHeldMinor ?? 0)} of ${formatDollars(part.moneyTargetMinor)}`,
