@@ -29,7 +29,7 @@ export function DueActs({ clock, may, todayOn }: DueActsProps) {
   const people = <PeopleChoices ownerId={clock.ownerId} onChoose={assign} />
   return (
     <>
-      <div className="-my-1 -mr-1.5 flex justify-end gap-1.5 whitespace-nowrap max-sm:hidden">
+      <div className="-mt-2 -mr-1.5 -mb-1 flex justify-end gap-1.5 whitespace-nowrap max-sm:hidden">
         {mayAcknowledge && (
           <Button
             look="quiet"

@@ -35,10 +35,12 @@ export function NewApplicationForm({ choices }: { choices: ApplicationChoices })
   // One id for the form: sent twice it is the same application.
   const [id] = useState(newId)
   const [draft, setDraft] = useState(emptyDraft)
+  const [isAnswered, setAnswered] = useState(false)
   const router = useRouter()
 
   async function send() {
     const { input, faults } = checkDraft(id, draft, choices.projects)
+    setAnswered(input !== null)
     if (!input) throw new ProblemError(422, 'invalid', 'Some fields need another look', faults)
     const started = await createApplication(input)
     router.push(routes.application(started.id))
@@ -47,7 +49,11 @@ export function NewApplicationForm({ choices }: { choices: ApplicationChoices })
   const { onSubmit, busy, problem, fields, errorOf } = useFormCall(send)
   const change = (part: Partial<ApplicationDraft>) =>
     setDraft((before) => withFittingProcedure({ ...before, ...part }, choices))
-  const parts = { draft, change, choices, errorOf }
+  const stillWrong = isAnswered ? fields : checkDraft(id, draft, choices.projects).faults
+  // A fault goes as soon as its field is right; what the server refused stays until it is sent again.
+  const openErrorOf = (path: string) =>
+    stillWrong.some((fault) => fault.path === path) ? errorOf(path) : undefined
+  const parts = { draft, change, choices, errorOf: openErrorOf }
   return (
     <form method="post" noValidate onSubmit={onSubmit} className="max-w-3xl">
       <ErrorSummary errors={fields} />

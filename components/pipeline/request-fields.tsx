@@ -34,12 +34,14 @@ export function RequestFields({ draft, change, choices, errorOf }: DraftFieldsPr
         onChange={({ target }) => change({ poiVoltageKv: target.value })}
         error={errorOf('terms.poiVoltageKv')}
       />
-      <CheckboxField
-        label="On a mainline, within 2.5 circuit miles of the substation"
-        name="terms.onMainline"
-        checked={draft.onMainline}
-        onChange={({ target }) => change({ onMainline: target.checked })}
-      />
+      <div className="border-rule-2 border-b sm:pl-[calc(13rem+10px)]">
+        <CheckboxField
+          label="On a mainline, within 2.5 circuit miles of the substation"
+          name="terms.onMainline"
+          checked={draft.onMainline}
+          onChange={({ target }) => change({ onMainline: target.checked })}
+        />
+      </div>
       <NumberField
         label="At the POI"
         name="terms.requestedMw"
