@@ -15,6 +15,7 @@ import { YearSheet } from '@/components/design/year-sheet'
 import { YearTitle } from '@/components/design/year-title'
 import { isSaved, sameDesign } from '@/components/design/use-freeze'
 import { checksOf } from '@/lib/domain/plant/design-checks'
+import { ENGINE_VERSION } from '@/lib/domain/plant/year'
 import type { CalculationSummary, DesignBody, DesignRevision } from '@/lib/schemas/design'
 import type { Weather } from '@/lib/schemas/weather'
 
@@ -70,11 +71,13 @@ export function DesignDesk(props: DesignDeskProps) {
   const saved =
     design !== null &&
     isSaved({ applicationId, projectId: project.id, base, design, weatherId: weatherId ?? '' })
+  const frozen =
+    saved && calculations.find((one) => one.designRevisionId === base?.id && isCurrent(one))
 
   return (
     <WeatherDrop onFiles={onFiles}>
       <YearTitle
-        name={`${project.name}, not frozen`}
+        name={`${project.name}, ${frozen ? `as no. ${frozen.no}` : 'not frozen'}`}
         note={base ? `${saved ? '' : 'changed from '}design revision ${base.no}` : 'no design yet'}
         year={shown?.year}
         weather={
@@ -140,6 +143,9 @@ export function DesignDesk(props: DesignDeskProps) {
 
 /** Not drawn again while fields move. */
 const SteadyLists = memo(KeptLists)
+
+/** Frozen by the same engine that runs here, so that the figures are the same. */
+const isCurrent = (one: CalculationSummary) => one.engineVersion === ENGINE_VERSION
 
 const has = (list: readonly Weather[], one: Weather) => list.some(({ id }) => id === one.id)
 

@@ -45,7 +45,7 @@ export function KeptLists(props: KeptListsProps) {
 
 function calculationColumns(zone: string): Column<CalculationSummary>[] {
   return [
-    { key: 'no', header: 'No.', cell: (row) => <span className="mono">{row.no}</span> },
+    { key: 'no', header: 'Calculation', cell: (row) => `no. ${row.no}` },
     {
       key: 'clipped',
       header: 'Clipped a year',
@@ -84,7 +84,7 @@ function revisionColumns(
   weatherNames: Readonly<Record<string, string>>,
 ): Column<DesignRevision>[] {
   return [
-    { key: 'no', header: 'Rev.', cell: (row) => <span className="mono">{row.no}</span> },
+    { key: 'no', header: 'Design', cell: (row) => `revision ${row.no}` },
     {
       key: 'array',
       header: 'Array',

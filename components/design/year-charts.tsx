@@ -127,7 +127,7 @@ export const MonthsPart = memo(function MonthsPart({ year, design }: YearProps) 
   }))
   return (
     <Part title="Energy at the POI by month">
-      <ChartBox fallback={360} height={220}>
+      <ChartBox fallback={600} height={220}>
         {(width) => <MonthBars {...common} months={months} width={width} height={220} />}
       </ChartBox>
     </Part>
@@ -137,7 +137,10 @@ export const MonthsPart = memo(function MonthsPart({ year, design }: YearProps) 
 /** Losses along the one-line, from the array to the POI. */
 export const LossPart = memo(function LossPart(props: YearProps) {
   return (
-    <Part title="From the array to the POI">
+    <Part
+      title="From the array to the POI"
+      note="From the array’s STC rating under the light on its plane; each loss of what arrives there."
+    >
       <ChartBox fallback={1100} height={190}>
         {(width) => <LossChain {...common} places={lossPlaces(props)} width={width} />}
       </ChartBox>
@@ -164,7 +167,7 @@ export function lossPlaces({ year, design }: YearProps): LossPlace[] {
   return [
     {
       kind: 'pv_array',
-      title: 'Array at its rating',
+      title: 'Array',
       energyKwh: atRating,
       losses: [
         { label: 'Incidence and temperature', fraction: 1 - ratio(beforeDc, atRating) },
