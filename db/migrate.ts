@@ -5,6 +5,7 @@ import { migrate } from 'drizzle-orm/node-postgres/migrator'
 import { Logger, runMigrations } from 'graphile-worker'
 import { Client, Pool } from 'pg'
 import { guardAppendOnlyTables } from '@/db/append-only-triggers'
+import { guardFrozenExhibits } from '@/db/frozen-triggers'
 import { grantToApplication } from '@/db/grants'
 
 const folder = path.join(import.meta.dirname, '../drizzle')
@@ -25,6 +26,7 @@ async function migrateJobs(ownerUrl: string): Promise<void> {
 async function finish(client: Client, applicationRole: string | null): Promise<void> {
   await client.query('begin')
   await guardAppendOnlyTables(client)
+  await guardFrozenExhibits(client)
   if (applicationRole) await grantToApplication(client, applicationRole)
   await client.query('commit')
 }

@@ -2,6 +2,7 @@ import type { Door } from '@/lib/http/door'
 import { applicationDoors } from '@/lib/http/doors/applications'
 import { calendarDoors } from '@/lib/http/doors/calendar'
 import { correspondenceDoors } from '@/lib/http/doors/correspondence'
+import { exhibitDoors } from '@/lib/http/doors/exhibits'
 import { houseDoors } from '@/lib/http/doors/house'
 import { noticeDoors } from '@/lib/http/doors/notices'
 import { designDoors, plantDoors } from '@/lib/http/doors/plant'
@@ -19,4 +20,5 @@ export const doors: readonly Door[] = [
   ...calendarDoors,
   ...plantDoors,
   ...designDoors,
+  ...exhibitDoors,
 ]
