@@ -83,6 +83,7 @@ export function PlainField(props: PlainFieldProps) {
       return (
         <SelectField
           label="Channel"
+          optional
           name="channel"
           emptyLabel="Not said"
           options={channels.map((one) => ({ value: one, label: capitalized(channelWords[one]) }))}
