@@ -48,7 +48,7 @@ function signStep(tendered: StepRef[]): Step {
       { key: 'signed', title: 'Signed and returned' },
       { key: 'unsigned_filing', title: 'Asked to file it unsigned' },
     ],
-    onMiss: withdrawn('Sign, or ask for the unsigned filing, before the hour closes.'),
+    onMiss: withdrawn('Call, then sign or ask for the unsigned filing.'),
     evidence: 'Signed agreement and proof of delivery',
     source: sgip.memory(
       'SG-70',

@@ -118,7 +118,7 @@ function cureStep(onMiss?: Consequence): Step {
     start: { mode: 'all', of: [{ step: 'completeness', outcome: ['deficient'] }] },
     clocks: [{ length: 10, unit: 'business_day' }],
     outcomes: [{ key: 'supplied', title: 'Listed items supplied' }],
-    onMiss: onMiss ?? withdrawn('Ask for more time in writing today, before the hour closes.'),
+    onMiss: onMiss ?? withdrawn('Call, then ask for more time in writing.'),
     evidence: 'Receipt of what was supplied',
     source: sgip.adapted('SG-08', '1.3', 'More time on request; the length is not fixed.'),
   })

@@ -78,7 +78,7 @@ function sideSteps({ side, tenderDays, tender, studyDays, study }: ImpactSide, r
         { key: 'deposit', title: depositTitle(side), what: 'money', leadBusinessDays: 3 },
       ],
       outcomes: [{ key: 'returned', title: 'Returned with the deposit' }],
-      onMiss: withdrawn('Return the agreement before the hour closes.'),
+      onMiss: withdrawn('Call, then return the agreement or ask for more time.'),
       source: sgip.memory('SG-58', '3.4.6, 3.4.7, Att. 7', 'medium'),
     }),
     stepWith({

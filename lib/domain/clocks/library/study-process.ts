@@ -134,7 +134,7 @@ const feasibilitySteps: Step[] = [
       },
     ],
     outcomes: [{ key: 'returned', title: 'Returned with the deposit' }],
-    onMiss: withdrawn('Return the agreement before the hour closes.'),
+    onMiss: withdrawn('Call, then return the agreement or ask for more time.'),
     source: sgip.adapted('SG-52', '3.2.3', 'Deposit: SG-53, 3.3.2.'),
   }),
   stepWith({
