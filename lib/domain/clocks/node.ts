@@ -1,3 +1,4 @@
+import { formatClosingHour, zoneName } from '@/lib/domain/format-date'
 import { closeNode } from '@/lib/domain/clocks/closing'
 import { runClock } from '@/lib/domain/clocks/clock-run'
 import type { Fact } from '@/lib/domain/clocks/facts'
@@ -133,7 +134,7 @@ function dueInstant(graph: Graph, step: Step, node: Node): void {
     node.derivation.push({
       kind: 'hour',
       on: workOn,
-      text: `Closes ${closesAt}, ${rules.zone.replace('_', ' ')}, the hour of ${rules.name}.`,
+      text: `Closes ${formatClosingHour(closesAt)} ${zoneName(rules.zone, node.dueAt)}, the hour of ${rules.name}.`,
     })
   if (node.provisional)
     node.derivation.push({
