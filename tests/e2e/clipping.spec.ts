@@ -56,6 +56,10 @@ const cell = (page: Page, caption: string) =>
     .locator('dd')
     .first()
 
+/** A figure as the chain gave it, to the last digit. */
+const unrounded = (page: Page, caption: string) =>
+  cell(page, caption).locator('data').getAttribute('value')
+
 test('Fifty moves of a field in two seconds show their figures in order, and the page never stalls', async ({
   pageOf,
 }) => {
@@ -107,9 +111,10 @@ test('An engineer brings a station file, is told what is wrong with another, and
   await expect(engineer.getByText('1,505.9 V of 1,500 V, one too many')).toBeVisible()
   await series.fill('24')
   await expect(cell(engineer, 'Array over export limit')).toHaveText('1.25')
+  await expect(engineer.locator('[data-run][aria-busy="false"]')).toBeVisible()
   const figures = async () => ({
-    clipped: await cell(engineer, 'Clipped a year').textContent(),
-    energy: await cell(engineer, 'At the POI, a year').textContent(),
+    clipped: await unrounded(engineer, 'Clipped a year'),
+    energyKwh: await unrounded(engineer, 'At the POI, a year'),
   })
   const live = await figures()
 
@@ -117,6 +122,7 @@ test('An engineer brings a station file, is told what is wrong with another, and
   await engineer.getByRole('button', { name: 'Freeze as no. 1' }).click()
   await expect(engineer).toHaveURL(/\/design\/calculations\/1$/)
   await expect(engineer.getByText(/frozen .* by Tobin Arceneth/)).toBeVisible()
+  expect(live.energyKwh).toMatch(/^\d+\.\d{3,}$/)
   expect(await figures()).toEqual(live)
   await expect(engineer.getByRole('textbox', { name: 'Modules in series' })).toHaveAttribute(
     'readonly',

@@ -3,14 +3,14 @@ import path from 'node:path'
 import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { bodyOf } from './applications'
-import { expect, origin, test, type Seat } from './fixtures'
+import { expect, open, origin, test, type Seat } from './fixtures'
 import { api, routes } from '@/lib/routes'
 import type { Pipeline } from '@/lib/schemas/application'
 
 /** One address or several for each page of the product, by its folder under app. */
 type Addresses = (ids: { cold: string; juniper: string }) => string[]
 
-const open: Record<string, Addresses> = {
+const outside: Record<string, Addresses> = {
   'sign-in': () => [routes.signIn(), routes.signIn(routes.pipeline())],
   reset: () => [routes.forgotPassword()],
   'reset/[token]': () => [routes.resetPassword('no-such-link')],
@@ -61,7 +61,7 @@ function pageFolders(): string[] {
 }
 
 test('Every page of the product is walked here', () => {
-  expect(pageFolders().toSorted()).toEqual(Object.keys({ ...open, ...inside }).toSorted())
+  expect(pageFolders().toSorted()).toEqual(Object.keys({ ...outside, ...inside }).toSorted())
 })
 
 const wide = { width: 1440, height: 900 }
@@ -96,7 +96,7 @@ async function look(page: Page, size: typeof wide, scheme: Scheme): Promise<void
 
 /** Opens an address and waits until its script is at rest. */
 async function visit(page: Page, address: string): Promise<void> {
-  await page.goto(address)
+  await open(page, address)
   await page.waitForLoadState('networkidle')
   await expect.soft(page.getByRole('main').first(), `${address} has a main part`).toBeVisible()
 }
@@ -141,7 +141,7 @@ test('The pages before the sign-in are sound, wide and on a phone, light and dar
   page,
 }) => {
   test.setTimeout(120_000)
-  for (const address of Object.values(open).flatMap((of) => of({ cold: '', juniper: '' }))) {
+  for (const address of Object.values(outside).flatMap((of) => of({ cold: '', juniper: '' }))) {
     await visit(page, address)
     for (const scheme of ['light', 'dark'] as const) {
       await look(page, wide, scheme)
@@ -185,7 +185,7 @@ test('A file of 30 MB arrives byte for byte; one of 60 MB is refused with 413', 
 }) => {
   test.setTimeout(120_000)
   const page = await pageOf('liaison')
-  await page.goto(routes.due())
+  await open(page, routes.due())
   const { sha256, status, said } = await upload(page, 30)
   expect(status).toBe(201)
   expect(said).toMatchObject({ sha256, size: 30_000_000 })

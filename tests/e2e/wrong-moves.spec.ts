@@ -184,7 +184,9 @@ test('An invitation link opens once; later it says that it was used', async ({ p
   await acceptInvitation(await pageOf(), link)
   const later = await pageOf()
   await open(later, link)
-  await expect(later.getByRole('alert')).toContainText('This link was used already')
+  await expect(later.getByRole('main').getByRole('alert')).toContainText(
+    'This link was used already',
+  )
   await expect(later.getByLabel('New password')).toHaveCount(0)
   const secret = new URL(link).pathname.split('/').at(-1)
   const again = await send(later, api.acceptLink(), { secret, password: 'another plain password' })
