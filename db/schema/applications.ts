@@ -8,7 +8,6 @@ import {
   primaryKey,
   text,
   unique,
-  uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core'
 import { sql } from 'drizzle-orm'
