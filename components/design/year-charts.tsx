@@ -141,7 +141,7 @@ export const LossPart = memo(function LossPart(props: YearProps) {
       title="From the array to the POI"
       note="From the array’s STC rating under the light on its plane; each loss of what arrives there."
     >
-      <ChartBox fallback={1100} height={190}>
+      <ChartBox fallback={1100} height={150}>
         {(width) => <LossChain {...common} places={lossPlaces(props)} width={width} />}
       </ChartBox>
     </Part>

@@ -38,7 +38,7 @@ export function YearSheet({ shown, plant, waiting, seq, stale }: YearSheetProps)
         </section>
         {shown ? (
           <>
-            <div data-run={seq} aria-busy={stale} className={clsx(look, 'gap-8')}>
+            <div data-run={seq} aria-busy={stale ?? false} className={clsx(look, 'gap-8')}>
               <ClippingPart {...shown} />
               <DurationPart {...shown} />
               <MonthsPart {...shown} />

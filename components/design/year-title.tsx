@@ -1,4 +1,5 @@
 import { energyFigure, figure } from '@/components/chart/scale'
+import type { ReactNode } from 'react'
 import { TitleBlock } from '@/components/ui/title-block'
 import type { DesignYear } from '@/lib/domain/plant/design-year'
 
@@ -10,10 +11,10 @@ interface YearTitleProps {
   weather?: { name: string; synthetic: boolean }
 }
 
-/** The title block of a clipping calculation, live or frozen. */
+/** The title block of a clipping calculation, live or frozen; `data` carries the unrounded figures. */
 export function YearTitle({ name, note, year, weather }: YearTitleProps) {
   const annual = year?.annual
-  const or = (value: string | undefined) => value ?? '–'
+  const or = (value: ReactNode) => value ?? '–'
   return (
     <TitleBlock
       label="Clipping calculation"
@@ -26,9 +27,20 @@ export function YearTitle({ name, note, year, weather }: YearTitleProps) {
         { caption: 'Array over inverters', value: or(annual && figure(annual.dcPerInverterKw, 2)) },
         {
           caption: 'Clipped a year',
-          value: or(annual && `${figure(100 * annual.limitedFraction, 1)} %`),
+          value: or(
+            annual && (
+              <data value={annual.limitedFraction}>
+                {figure(100 * annual.limitedFraction, 1)} %
+              </data>
+            ),
+          ),
         },
-        { caption: 'At the POI, a year', value: or(annual && energyFigure(annual.exportKwh)) },
+        {
+          caption: 'At the POI, a year',
+          value: or(
+            annual && <data value={annual.exportKwh}>{energyFigure(annual.exportKwh)}</data>,
+          ),
+        },
         {
           caption: 'Weather',
           value: weather?.name ?? 'none chosen',

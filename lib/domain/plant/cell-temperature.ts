@@ -1,3 +1,5 @@
+import { expOf } from '@/lib/domain/plant/elementary'
+
 /** Cell temperature model and its coefficients. */
 export type CellTemperatureModel =
   | { model: 'faiman'; u0: number; u1: number }
@@ -25,7 +27,7 @@ export function sapmModuleC(
   a: number,
   b: number,
 ): number {
-  return dryBulbC + poa * Math.exp(a + b * windMPerS)
+  return dryBulbC + poa * expOf(a + b * windMPerS)
 }
 
 /** Cell temperature, C, `deltaT` being the rise over the back at 1,000 W/m2. Source: as above. */

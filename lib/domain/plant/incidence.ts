@@ -1,3 +1,5 @@
+import { expOf } from '@/lib/domain/plant/elementary'
+
 export type IncidenceModel = 'ashrae' | 'physical' | 'none'
 
 const REFRACTIVE_INDEX = 1.526
@@ -31,7 +33,7 @@ function glassTransmittance(cosIncidence: number): number {
   const n = REFRACTIVE_INDEX
   const s = (cosIncidence - n * cosRefracted) / (cosIncidence + n * cosRefracted)
   const p = (n * cosIncidence - cosRefracted) / (n * cosIncidence + cosRefracted)
-  return Math.exp(-EXTINCTION_TIMES_THICKNESS / cosRefracted) * (1 - (s * s + p * p) / 2)
+  return expOf(-EXTINCTION_TIMES_THICKNESS / cosRefracted) * (1 - (s * s + p * p) / 2)
 }
 
 const NORMAL_TRANSMITTANCE = glassTransmittance(1)

@@ -1,3 +1,5 @@
+import { acosOf, cosOf, powOf, sinOf } from '@/lib/domain/plant/elementary'
+
 const RAD = Math.PI / 180
 
 export type TranspositionModel = 'perez_1990' | 'hay_davies_1980' | 'isotropic'
@@ -10,16 +12,16 @@ export function extraterrestrialNormal(dayOfYear: number): number {
   const b = (2 * Math.PI * (dayOfYear - 1)) / 365
   const factor =
     1.00011 +
-    0.034221 * Math.cos(b) +
-    0.00128 * Math.sin(b) +
-    0.000719 * Math.cos(2 * b) +
-    0.000077 * Math.sin(2 * b)
+    0.034221 * cosOf(b) +
+    0.00128 * sinOf(b) +
+    0.000719 * cosOf(2 * b) +
+    0.000077 * sinOf(2 * b)
   return 1366.1 * factor
 }
 
 /** Relative optical air mass at an apparent zenith in radians. Source: Kasten & Young (1989). */
 export function airMass(zenithRad: number): number {
-  return 1 / (Math.cos(zenithRad) + 0.50572 * (96.07995 - zenithRad / RAD) ** -1.6364)
+  return 1 / (cosOf(zenithRad) + 0.50572 * powOf(96.07995 - zenithRad / RAD, -1.6364))
 }
 
 /** Ground-reflected irradiance on the plane, W/m2. Source: Liu & Jordan (1963). */
@@ -60,7 +62,7 @@ const PEREZ_COEFFICIENTS = new Float64Array([
   0.264, -1.127, 0.131, 0.678, -0.327, -0.25, 0.156, -1.377, 0.251,
 ])
 
-const COS_85 = Math.cos(85 * RAD)
+const COS_85 = cosOf(85 * RAD)
 
 /**
  * Sky diffuse on the plane, W/m2, never below 0.
@@ -76,7 +78,7 @@ export function perezSky(
   sinTilt: number,
 ): number {
   if (dhi <= 0) return 0
-  const zenith = Math.acos(cosZenith)
+  const zenith = acosOf(cosZenith)
   const cubed = 1.041 * zenith * zenith * zenith
   const clearness = ((dhi + dni) / dhi + cubed) / (1 + cubed)
   const brightness = (dhi * airMass(zenith)) / extraterrestrial

@@ -1,3 +1,4 @@
+import { cosOf, sinOf } from '@/lib/domain/plant/elementary'
 import { incidenceModifier } from '@/lib/domain/plant/incidence'
 import {
   groundReflected,
@@ -139,10 +140,10 @@ function orientation(mounting: Mounting): Orient {
 }
 
 function fixedPlane(tiltDeg: number, azimuthDeg: number): Orient {
-  const cosTilt = Math.cos(tiltDeg * RAD)
-  const sinTilt = Math.sin(tiltDeg * RAD)
-  const east = sinTilt * Math.sin(azimuthDeg * RAD)
-  const north = sinTilt * Math.cos(azimuthDeg * RAD)
+  const cosTilt = cosOf(tiltDeg * RAD)
+  const sinTilt = sinOf(tiltDeg * RAD)
+  const east = sinTilt * sinOf(azimuthDeg * RAD)
+  const north = sinTilt * cosOf(azimuthDeg * RAD)
   return (plane, sunEast, sunNorth, sunUp) => {
     plane.cosTilt = cosTilt
     plane.sinTilt = sinTilt
@@ -151,16 +152,16 @@ function fixedPlane(tiltDeg: number, azimuthDeg: number): Orient {
 }
 
 function trackingPlane(tracker: Extract<Mounting, { kind: 'single_axis_tracker' }>): Orient {
-  const axisCos = Math.cos(tracker.axisAzimuthDeg * RAD)
-  const axisSin = Math.sin(tracker.axisAzimuthDeg * RAD)
+  const axisCos = cosOf(tracker.axisAzimuthDeg * RAD)
+  const axisSin = sinOf(tracker.axisAzimuthDeg * RAD)
   const maxRotation = tracker.maxRotationDeg * RAD
   const { groundCoverRatio, backtrack } = tracker
   return (plane, sunEast, sunNorth, sunUp) => {
     const cross = sunEast * axisCos - sunNorth * axisSin
     const rotation =
       sunUp > 0 ? trackerRotation(cross, sunUp, groundCoverRatio, maxRotation, backtrack) : 0
-    const sinRotation = Math.sin(rotation)
-    plane.cosTilt = Math.cos(rotation)
+    const sinRotation = sinOf(rotation)
+    plane.cosTilt = cosOf(rotation)
     plane.sinTilt = Math.abs(sinRotation)
     plane.cosIncidence = clampUnit(cross * sinRotation + sunUp * plane.cosTilt)
   }

@@ -1,3 +1,4 @@
+import { asinOf, atan2Of, cosOf, sinOf, tanOf } from '@/lib/domain/plant/elementary'
 import { NUTATION_TERMS } from '@/lib/domain/plant/nutation-terms'
 import {
   EARTH_LATITUDE_TERMS,
@@ -33,16 +34,16 @@ export function geocentricSun(jd: number, deltaTSeconds = DELTA_T_SECONDS): Geoc
   const obliquity = meanObliquity(millennium) + nutation.obliquity
   const aberration = (-20.4898 / 3600 / radiusAu) * RAD
   const longitude = heliocentricLongitude + Math.PI + nutation.longitude + aberration
-  const sinLongitude = Math.sin(longitude)
-  const cosObliquity = Math.cos(obliquity)
-  const sinObliquity = Math.sin(obliquity)
+  const sinLongitude = sinOf(longitude)
+  const cosObliquity = cosOf(obliquity)
+  const sinObliquity = sinOf(obliquity)
   return {
-    rightAscension: Math.atan2(
-      sinLongitude * cosObliquity - Math.tan(latitude) * sinObliquity,
-      Math.cos(longitude),
+    rightAscension: atan2Of(
+      sinLongitude * cosObliquity - tanOf(latitude) * sinObliquity,
+      cosOf(longitude),
     ),
-    declination: Math.asin(
-      Math.sin(latitude) * cosObliquity + Math.cos(latitude) * sinObliquity * sinLongitude,
+    declination: asinOf(
+      sinOf(latitude) * cosObliquity + cosOf(latitude) * sinObliquity * sinLongitude,
     ),
     siderealCorrection: nutation.longitude * cosObliquity,
     radiusAu,
@@ -74,7 +75,7 @@ function series(groups: readonly Float64Array[], millennium: number): number {
   for (const rows of groups) {
     let part = 0
     for (let k = 0; k < rows.length; k += 3) {
-      part += rows[k]! * Math.cos(rows[k + 1]! + rows[k + 2]! * millennium)
+      part += rows[k]! * cosOf(rows[k + 1]! + rows[k + 2]! * millennium)
     }
     sum += part * power
     power *= millennium
@@ -103,8 +104,8 @@ function nutationAt(t: number): { longitude: number; obliquity: number } {
   const n = NUTATION
   for (let k = 0; k < n.length; k += 9) {
     const argument = n[k]! * x0 + n[k + 1]! * x1 + n[k + 2]! * x2 + n[k + 3]! * x3 + n[k + 4]! * x4
-    longitude += (n[k + 5]! + n[k + 6]! * t) * Math.sin(argument)
-    if (n[k + 7] !== 0) obliquity += (n[k + 7]! + n[k + 8]! * t) * Math.cos(argument)
+    longitude += (n[k + 5]! + n[k + 6]! * t) * sinOf(argument)
+    if (n[k + 7] !== 0) obliquity += (n[k + 7]! + n[k + 8]! * t) * cosOf(argument)
   }
   return { longitude: (longitude / 36000000) * RAD, obliquity: (obliquity / 36000000) * RAD }
 }

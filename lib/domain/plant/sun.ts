@@ -1,3 +1,13 @@
+import {
+  acosOf,
+  asinOf,
+  atan2Of,
+  atanOf,
+  cosOf,
+  powOf,
+  sinOf,
+  tanOf,
+} from '@/lib/domain/plant/elementary'
 import { dayNumber, dayOfYear } from '@/lib/domain/plant/calendar-day'
 import { extraterrestrialNormal } from '@/lib/domain/plant/irradiance'
 import {
@@ -12,7 +22,7 @@ const RAD = Math.PI / 180
 const UNIX_EPOCH_JD = 2440587.5
 /** Refraction is applied down to here: half the sun's disk plus refraction at the horizon. */
 const REFRACTION_FROM_DEG = -(0.26667 + 0.5667)
-const REFRACTION_FROM_SIN = Math.sin(REFRACTION_FROM_DEG * RAD)
+const REFRACTION_FROM_SIN = sinOf(REFRACTION_FROM_DEG * RAD)
 
 export interface SunSite {
   latitudeDeg: number
@@ -53,7 +63,7 @@ interface Observer {
 
 /** Standard pressure at an elevation in m, Pa (pv-reference.md section 1). */
 export function pressureAt(elevationM: number): number {
-  return 100 * ((44331.514 - elevationM) / 11880.516) ** (1 / 0.1902632)
+  return 100 * powOf((44331.514 - elevationM) / 11880.516, 1 / 0.1902632)
 }
 
 /**
@@ -64,10 +74,10 @@ export function sunPosition(jd: number, site: SunSite, deltaTSeconds?: number): 
   const sun = geocentricSun(jd, deltaTSeconds)
   const vector: SunVector = { east: 0, north: 0, up: 0, trueUp: 0 }
   topocentric(meanSiderealTime(jd), sun, observerOf(site), vector)
-  const azimuth = Math.atan2(vector.east, vector.north) / RAD
+  const azimuth = atan2Of(vector.east, vector.north) / RAD
   return {
-    trueZenithDeg: Math.acos(clampUnit(vector.trueUp)) / RAD,
-    apparentZenithDeg: Math.acos(clampUnit(vector.up)) / RAD,
+    trueZenithDeg: acosOf(clampUnit(vector.trueUp)) / RAD,
+    apparentZenithDeg: acosOf(clampUnit(vector.up)) / RAD,
     azimuthDeg: azimuth < 0 ? azimuth + 360 : azimuth,
   }
 }
@@ -123,16 +133,16 @@ export function sunYear(
 
 function observerOf(site: SunSite): Observer {
   const latitude = site.latitudeDeg * RAD
-  const u = Math.atan(0.99664719 * Math.tan(latitude))
+  const u = atanOf(0.99664719 * tanOf(latitude))
   const height = site.elevationM / 6378140
   const pressurePa = site.pressurePa ?? pressureAt(site.elevationM)
   const kelvin = 273 + (site.temperatureC ?? 12)
   return {
     longitude: site.longitudeDeg * RAD,
-    sinLatitude: Math.sin(latitude),
-    cosLatitude: Math.cos(latitude),
-    axial: Math.cos(u) + height * Math.cos(latitude),
-    polar: 0.99664719 * Math.sin(u) + height * Math.sin(latitude),
+    sinLatitude: sinOf(latitude),
+    cosLatitude: cosOf(latitude),
+    axial: cosOf(u) + height * cosOf(latitude),
+    polar: 0.99664719 * sinOf(u) + height * sinOf(latitude),
     refractionFactor: ((pressurePa / 101000) * 283 * 1.02) / (kelvin * 60),
   }
 }
@@ -148,19 +158,19 @@ function topocentric(
   out: SunVector,
 ): void {
   const hourAngle = siderealTime + sun.siderealCorrection + observer.longitude - sun.rightAscension
-  const parallax = Math.sin((8.794 / 3600 / sun.radiusAu) * RAD)
-  const cosDeclination = Math.cos(sun.declination)
-  const x = cosDeclination * Math.cos(hourAngle) - observer.axial * parallax
-  const y = cosDeclination * Math.sin(hourAngle)
-  const z = Math.sin(sun.declination) - observer.polar * parallax
+  const parallax = sinOf((8.794 / 3600 / sun.radiusAu) * RAD)
+  const cosDeclination = cosOf(sun.declination)
+  const x = cosDeclination * cosOf(hourAngle) - observer.axial * parallax
+  const y = cosDeclination * sinOf(hourAngle)
+  const z = sinOf(sun.declination) - observer.polar * parallax
   const length = Math.sqrt(x * x + y * y + z * z)
   const south = (x * observer.sinLatitude - z * observer.cosLatitude) / length
   const west = y / length
   const trueUp = (z * observer.sinLatitude + x * observer.cosLatitude) / length
   const level = Math.sqrt(south * south + west * west)
   const lift = refraction(trueUp, observer.refractionFactor)
-  const cosLift = Math.cos(lift)
-  const sinLift = Math.sin(lift)
+  const cosLift = cosOf(lift)
+  const sinLift = sinOf(lift)
   const scale = level > 0 ? (level * cosLift - trueUp * sinLift) / level : 1
   out.east = -west * scale
   out.north = -south * scale
@@ -171,8 +181,8 @@ function topocentric(
 /** Refraction, radians (equation 42 of NREL/TP-560-34302), 0 for a sun well below the horizon. */
 function refraction(trueUp: number, factor: number): number {
   if (trueUp < REFRACTION_FROM_SIN) return 0
-  const elevationDeg = Math.asin(clampUnit(trueUp)) / RAD
-  return (factor / Math.tan((elevationDeg + 10.3 / (elevationDeg + 5.11)) * RAD)) * RAD
+  const elevationDeg = asinOf(clampUnit(trueUp)) / RAD
+  return (factor / tanOf((elevationDeg + 10.3 / (elevationDeg + 5.11)) * RAD)) * RAD
 }
 
 function clampUnit(value: number): number {

@@ -1,3 +1,4 @@
+import { acosOf, cosOf, expOf, powOf } from '@/lib/domain/plant/elementary'
 import { dayNumber, daysInMonth, expectedStamp } from '@/lib/domain/plant/calendar-day'
 import { airMass } from '@/lib/domain/plant/irradiance'
 import { sunYear, type SunYear } from '@/lib/domain/plant/sun'
@@ -96,7 +97,7 @@ function fillMonth(
 
 /** Clear-sky global horizontal, W/m2, by the cosine of the zenith. Source: Haurwitz (1945). */
 export function haurwitzClearSky(cosZenith: number): number {
-  return cosZenith > 0 ? 1098 * cosZenith * Math.exp(-0.057 / cosZenith) : 0
+  return cosZenith > 0 ? 1098 * cosZenith * expOf(-0.057 / cosZenith) : 0
 }
 
 /** Diffuse share of global by the clearness index. Source: Erbs, Klein & Duffie (1982). */
@@ -125,7 +126,7 @@ function fillGlobal(
   const clearest = Math.max(CLEAREST, meanIndex * 1.01)
   const exponent = clearest / meanIndex - 1
   for (let i = first; i < first + hours; i++) {
-    const dayIndex = clearest * spread(Math.floor(i / 24), STEPS.sky) ** exponent
+    const dayIndex = clearest * powOf(spread(Math.floor(i / 24), STEPS.sky), exponent)
     const swing = 0.6 * Math.min(dayIndex, clearest - dayIndex)
     const index = dayIndex + swing * (spread(i, STEPS.hour) - 0.5)
     year.ghi[i] = index * haurwitzClearSky(sun.up[i]!)
@@ -158,7 +159,7 @@ function splitGlobal(year: WeatherYear, sun: SunYear, first: number, hours: numb
     if (up <= 0 || global <= 0) continue
     const normal = sun.extraterrestrial[i]!
     const diffuse = global * erbsDiffuseFraction(global / (normal * up))
-    const clearBeam = normal * 0.7 ** (airMass(Math.acos(up)) ** 0.678)
+    const clearBeam = normal * powOf(0.7, powOf(airMass(acosOf(up)), 0.678))
     const beam = Math.min((global - diffuse) / up, clearBeam)
     year.dni[i] = beam
     year.dhi[i] = global - beam * up
@@ -188,7 +189,7 @@ function fillWind(year: WeatherYear, first: number, hours: number, mean: number)
 
 /** 1 at the hour that ends at 15:00, -1 twelve hours away. */
 function dailyCourse(hour: number): number {
-  return Math.cos((2 * Math.PI * (hour - 15)) / 24)
+  return cosOf((2 * Math.PI * (hour - 15)) / 24)
 }
 
 /** Evenly filling value between 0 and 1 at a position. */

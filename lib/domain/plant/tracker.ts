@@ -1,3 +1,5 @@
+import { acosOf, atan2Of, cosOf, sinOf } from '@/lib/domain/plant/elementary'
+
 const RAD = Math.PI / 180
 
 /** Horizontal single-axis tracker on level ground. */
@@ -21,10 +23,10 @@ export function trackerRotation(
   maxRotationRad: number,
   backtrack: boolean,
 ): number {
-  let rotation = Math.atan2(cross, up)
+  let rotation = atan2Of(cross, up)
   if (backtrack) {
-    const share = Math.abs(Math.cos(rotation)) / groundCoverRatio
-    if (share < 1) rotation -= Math.sign(rotation) * Math.acos(share)
+    const share = Math.abs(cosOf(rotation)) / groundCoverRatio
+    if (share < 1) rotation -= Math.sign(rotation) * acosOf(share)
   }
   return Math.min(Math.max(rotation, -maxRotationRad), maxRotationRad)
 }
@@ -35,10 +37,10 @@ export function trackerRotationDeg(
   azimuthDeg: number,
   tracker: TrackerGeometry,
 ): number {
-  const cross = Math.sin(zenithDeg * RAD) * Math.sin((azimuthDeg - tracker.axisAzimuthDeg) * RAD)
+  const cross = sinOf(zenithDeg * RAD) * sinOf((azimuthDeg - tracker.axisAzimuthDeg) * RAD)
   const rotation = trackerRotation(
     cross,
-    Math.cos(zenithDeg * RAD),
+    cosOf(zenithDeg * RAD),
     tracker.groundCoverRatio,
     tracker.maxRotationDeg * RAD,
     tracker.backtrack,
@@ -63,9 +65,7 @@ export function incidenceAngleDeg(
   planeAzimuthDeg: number,
 ): number {
   const cosine =
-    Math.cos(zenithDeg * RAD) * Math.cos(tiltDeg * RAD) +
-    Math.sin(zenithDeg * RAD) *
-      Math.sin(tiltDeg * RAD) *
-      Math.cos((azimuthDeg - planeAzimuthDeg) * RAD)
-  return Math.acos(Math.min(Math.max(cosine, -1), 1)) / RAD
+    cosOf(zenithDeg * RAD) * cosOf(tiltDeg * RAD) +
+    sinOf(zenithDeg * RAD) * sinOf(tiltDeg * RAD) * cosOf((azimuthDeg - planeAzimuthDeg) * RAD)
+  return acosOf(Math.min(Math.max(cosine, -1), 1)) / RAD
 }
