@@ -2,6 +2,7 @@ import { leadBefore } from '@/lib/domain/clocks/clock-run'
 import { later } from '@/lib/domain/clocks/civil-date'
 import type { Fact } from '@/lib/domain/clocks/facts'
 import { rulesFor, type Graph, type Node } from '@/lib/domain/clocks/graph'
+import { moneyState } from '@/lib/domain/clocks/money-state'
 import type { ObligationRule, Step } from '@/lib/domain/clocks/procedure'
 import { datedEvent, receivedByUtility } from '@/lib/domain/clocks/receipt'
 import { sayDate } from '@/lib/domain/clocks/say'
@@ -108,17 +109,10 @@ function obligationDone(
   rule: ObligationRule,
 ): string | null | undefined {
   if (graph.index.waived(step.key, node.instance, rule.key)) return null
-  const facts = graph.index.obligationFacts(step.key, node.instance, rule.key)
-  const target = rule.what === 'money' ? rule.target?.amountMinor : undefined
-  const last =
-    target === undefined
-      ? facts.at(-1)
-      : facts.find((_, at) => heldOf(facts.slice(0, at + 1)) >= target)
+  if (rule.what === 'money' && rule.target)
+    return moneyState(graph, step, node, rule, rule.target).metOn
+  const last = graph.index.obligationFacts(step.key, node.instance, rule.key).at(-1)
   return last && (eventDate(last) ?? null)
-}
-
-function heldOf(facts: readonly Fact[]): number {
-  return facts.reduce((sum, fact) => sum + (fact.amountMinor ?? 0), 0)
 }
 
 /** The obligations of a round as items of their own, with start-by dates and money. */
@@ -128,7 +122,8 @@ export function obligationItems(graph: Graph, step: Step, node: Node): Scheduled
   return (step.obligations ?? []).map((rule) => {
     const { presumed: _presumed, ...base } = node
     const doneOn = obligationDone(graph, step, node, rule)
-    const facts = graph.index.obligationFacts(step.key, node.instance, rule.key)
+    const money =
+      rule.what === 'money' ? moneyState(graph, step, node, rule, rule.target ?? null) : null
     const open = node.status === 'open' || node.status === 'stopped' || node.status === 'waiting'
     const lead = rule.leadBusinessDays
     return {
@@ -142,9 +137,12 @@ export function obligationItems(graph: Graph, step: Step, node: Node): Scheduled
       doneOn: doneOn ?? (open ? null : node.doneOn),
       doneLate: null,
       startBy: workOn && lead ? leadBefore(workOn, lead, rulesFor(graph.parties, step)) : null,
-      moneyTargetMinor: rule.target?.amountMinor ?? null,
-      moneyHeldMinor: rule.what === 'money' ? heldOf(facts) : null,
-      derivation: node.derivation.filter((line) => line.kind === 'count' || line.kind === 'source'),
+      moneyTargetMinor: money?.targetMinor ?? null,
+      moneyHeldMinor: money?.heldMinor ?? null,
+      derivation: [
+        ...node.derivation.filter((line) => line.kind === 'count' || line.kind === 'source'),
+        ...(money?.lines ?? []),
+      ],
     }
   })
 }

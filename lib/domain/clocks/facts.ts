@@ -20,6 +20,16 @@ export type FactKind = (typeof factKinds)[number]
 export const channels = ['portal', 'email', 'letter', 'call', 'meeting', 'hand'] as const
 export type Channel = (typeof channels)[number]
 
+/** The study or agreement that last assigned network upgrade cost to the request. */
+export const assigningStudies = [
+  'cluster_study',
+  'cluster_restudy',
+  'facilities_study',
+  'facilities_restudy',
+  'agreement',
+] as const
+export type AssigningStudy = (typeof assigningStudies)[number]
+
 export interface Terms {
   requestNo?: string
   poi?: string
@@ -36,6 +46,11 @@ export interface Terms {
   serviceType?: string
   onMainline?: boolean
   codOn?: string
+  /** Network upgrade cost assigned to the request, and by which study; minor units. */
+  assignedCostMinor?: number
+  assignedBy?: AssigningStudy
+  /** The share of the study cost allocated to the request so far; minor units. */
+  allocatedStudyCostMinor?: number
 }
 
 export interface FactBody {

@@ -61,13 +61,49 @@ export interface ClockRule {
   onMiss?: Consequence
 }
 
-export type MoneyRule = { kind: 'fixed'; amountMinor: number }
+export type MwTerm = 'requestedMw' | 'studiedMw' | 'grantedMw' | 'installedMw'
+
+/** A bracket by MW: from the edge of the one before up to, but not at, its own edge. */
+export interface MwBracket {
+  /** Left out in the last, which has no upper edge. */
+  belowMw?: number
+  plusMinor?: number
+  perMwMinor?: number
+}
+
+/**
+ * An amount owed, in integer minor units, as data.
+ *
+ * `share` is of the network upgrade cost assigned to the request: a total to reach, less what is
+ * held on the same account. `mw` names the megawatts that count, the requested ones if left out.
+ */
+export type MoneyRule =
+  | { kind: 'fixed'; amountMinor: number }
+  | {
+      kind: 'per_mw'
+      perMwMinor: number
+      plusMinor?: number
+      atLeastMinor?: number
+      atMostMinor?: number
+      mw?: MwTerm
+    }
+  | { kind: 'per_kw'; perKwMinor: number; plusMinor?: number; mw?: MwTerm }
+  | { kind: 'bracketed'; brackets: MwBracket[]; mw?: MwTerm }
+  | { kind: 'multiple'; times: number; of: MoneyRule }
+  | { kind: 'share'; percent: number }
 
 export interface ObligationRule {
   key: string
   title: string
   what: 'document' | 'data' | 'site_control' | 'money' | 'act'
   target?: MoneyRule
+  /**
+   * Postings to all obligations of one account count together, so that a later target is a total
+   * to reach: what earlier steps hold is taken off.
+   */
+  account?: string
+  /** Until when what is posted comes back, in words. */
+  refundable?: string
   owner?: OwnerRole
   leadBusinessDays?: number
 }

@@ -1,4 +1,5 @@
 import { longestCount } from '@/lib/domain/clocks/count'
+import { moneyRuleFaults } from '@/lib/domain/clocks/money-rules'
 import type { Loop, PartyRole, ProcedureBody, Step } from '@/lib/domain/clocks/procedure'
 import { loopKeyOf, referencesOf } from '@/lib/domain/clocks/references'
 import { circles, orphans } from '@/lib/domain/clocks/validate-graph'
@@ -29,6 +30,7 @@ export function validateProcedure(body: ProcedureBody, ground: Ground = {}): Pro
       ...lengths(step),
       ...clockChoices(step, ground),
       ...kinds(body, step),
+      ...money(step),
     ]),
     ...body.loops.flatMap((loop) => loopFaults(body, loop)),
   ]
@@ -165,6 +167,18 @@ function kinds(body: ProcedureBody, step: Step): ProcedureFault[] {
   if (repeats.includes(step.kind) && loopKeyOf(body, step.key))
     fault('kind', 'A step of a loop has the rounds of the loop, none of its own.')
   return faults
+}
+
+function money(step: Step): ProcedureFault[] {
+  return (step.obligations ?? []).flatMap(({ key, what, target }) => {
+    const field = `obligations.${key}.target`
+    if (!target) return []
+    if (what !== 'money')
+      return [
+        { step: step.key, field, message: `Found an amount on "${what}"; only money has one.` },
+      ]
+    return moneyRuleFaults(target).map((message) => ({ step: step.key, field, message }))
+  })
 }
 
 function loopFaults(body: ProcedureBody, loop: Loop): ProcedureFault[] {
