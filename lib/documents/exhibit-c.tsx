@@ -92,7 +92,7 @@ function durationCurve({ result, design }: ExhibitSource): ReactElement {
     },
     {
       kw: inverterMw * 1000,
-      label: `${inverterMw.toFixed(1)} MW inverters, at the POI`,
+      label: `${inverterMw.toFixed(inverterMw < 10 ? 2 : 1)} MW inverters, at the POI`,
       clips: annual.inverterClippedKwh > 0,
     },
   ]

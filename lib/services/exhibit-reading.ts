@@ -1,4 +1,4 @@
-import { and, desc, eq, sql } from 'drizzle-orm'
+import { and, desc, eq, lte, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import type { Db, Tx } from '@/db/client'
 import { applications, applicationStates, facts } from '@/db/schema/applications'
@@ -77,8 +77,8 @@ export interface Ground {
   termsAt: Date | null
 }
 
-/** The present ground of an application. @throws ServiceError `not_found`. */
-export async function groundOf(db: Db | Tx, applicationId: string): Promise<Ground> {
+/** The ground of an application as recorded by `ctx.now`. @throws ServiceError `not_found`. */
+export async function groundOf(ctx: Context, db: Db | Tx, applicationId: string): Promise<Ground> {
   const [state] = await db
     .select({ terms: applicationStates.terms, projectId: applications.projectId })
     .from(applications)
@@ -89,7 +89,7 @@ export async function groundOf(db: Db | Tx, applicationId: string): Promise<Grou
     .select({ no: designRevisions.no, recordedAt: designRevisions.recordedAt })
     .from(designRevisions)
     .innerJoin(designs, eq(designs.id, designRevisions.designId))
-    .where(eq(designs.projectId, state.projectId))
+    .where(and(eq(designs.projectId, state.projectId), lte(designRevisions.recordedAt, ctx.now)))
     .orderBy(desc(designRevisions.no))
     .limit(1)
   const [fact] = await db

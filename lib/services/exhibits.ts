@@ -37,7 +37,7 @@ export async function listExhibits(
 ): Promise<ExhibitRevision[]> {
   authorize(ctx, 'exhibit.read')
   if (!isUuid(applicationId)) throw notFound('application')
-  const ground = await groundOf(ctx.db, applicationId)
+  const ground = await groundOf(ctx, ctx.db, applicationId)
   const rows = await revisionRows(ctx.db)
     .where(eq(exhibits.applicationId, applicationId))
     .orderBy(asc(exhibits.letter), desc(exhibitRevisions.no))
@@ -203,7 +203,7 @@ export async function issueExhibit(ctx: Context, id: string): Promise<ExhibitRev
     const row = await lockedRevision(tx, id)
     const { exhibit, revision } = row
     assertChecked(row)
-    const outOfStep = outOfStepOf(ctx, row, await groundOf(tx, exhibit.applicationId))
+    const outOfStep = outOfStepOf(ctx, row, await groundOf(ctx, tx, exhibit.applicationId))
     if (outOfStep)
       throw new ServiceError(
         'conflict',
@@ -294,7 +294,7 @@ export async function getExhibitRevision(ctx: Context, id: string): Promise<Exhi
 
 async function viewOf(ctx: Context, id: string): Promise<ExhibitRevision> {
   const row = await revisionRowOf(ctx.db, id)
-  return revisionView(ctx, row, await groundOf(ctx.db, row.exhibit.applicationId))
+  return revisionView(ctx, row, await groundOf(ctx, ctx.db, row.exhibit.applicationId))
 }
 
 function audited(ctx: Context, tx: Tx, verb: string, subjectId: string, after: object) {

@@ -8,7 +8,11 @@ import type { ContentRow } from '@/templates/exhibits/exhibit-c-content'
 export function methodRows({ design, result }: ExhibitSource): ContentRow[] {
   return result.methods.map(({ step, method, source }) => {
     const constants = constantsOf(step, design)
-    return { label: step, value: constants ? `${method}; ${constants}` : method, note: source }
+    return {
+      label: step,
+      value: constants ? `${method}; ${constants}` : method,
+      note: unbroken(source),
+    }
   })
 }
 
@@ -16,6 +20,11 @@ export function methodRows({ design, result }: ExhibitSource): ContentRow[] {
 export function calculationWords({ data }: ExhibitSource): string {
   const { calculation, design } = data
   return `Frozen on ${formatShortDate(calculation.recordedOn)} as calculation no. ${calculation.no} of design revision ${design.no} of ${formatShortDate(design.recordedOn)}, engine ${calculation.engineVersion}. SHA-256 of inputs and result: ${calculation.sha256}`
+}
+
+/** Report numbers stay on one line. */
+function unbroken(source: string): string {
+  return source.replace(/\b(?:NREL\/TP|SAND)[\w-]+/g, (no) => no.replaceAll('-', '\u2011'))
 }
 
 /** The constants of the step that the design sets. */

@@ -51,8 +51,9 @@ function cells(one: Energies): string[] {
   ]
 }
 
-/** MWh without decimals from 10 on, one decimal below. */
+/** MWh without decimals from 10 on, one decimal below, `<0.1` where that would hide it. */
 function mwh(kwh: number): string {
   const value = kwh / 1000
+  if (value > 0 && value < 0.05) return '<0.1'
   return figure(value, value !== 0 && Math.abs(value) < 10 ? 1 : 0)
 }

@@ -116,7 +116,7 @@ function resultSection(content: ExhibitCContent, pictures: ExhibitCPictures): Fi
     sideBySide(
       [
         pictureLine(pictures.clipping, 2),
-        pictureCaption('Figure 2. Clipped of a year’s energy, by array over export limit.'),
+        pictureCaption('Figure 2. Share of a year’s energy clipped, by array over export limit.'),
       ],
       [
         pictureLine(pictures.duration, 3),

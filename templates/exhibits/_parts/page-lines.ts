@@ -1,5 +1,5 @@
 import { Footer, Header, PageNumber, Paragraph, Tab, TabStopType, TextRun } from 'docx'
-import { contentWidth, figures } from '@/templates/exhibits/_parts/theme'
+import { amber, contentWidth, figures } from '@/templates/exhibits/_parts/theme'
 
 const tabStops = [
   { type: TabStopType.CENTER, position: contentWidth / 2 },
@@ -31,14 +31,15 @@ export function headers(of: PageLines): { first: Header; default: Header } {
     tabStops: right,
     children: [
       new TextRun(`${project}, request ${requestNo}`),
-      new TextRun({ children: [new Tab(), `Exhibit ${letter}: ${title}`] }),
+      new TextRun({ children: [new Tab(), `Exhibit ${letter}${isDraft ? '  ' : `: ${title}`}`] }),
+      ...(isDraft ? [new TextRun({ text: DRAFT, bold: true, color: amber })] : []),
     ],
   })
   return {
     first: new Header({
       children: mark.length > 0 ? mark : [new Paragraph({ style: 'PageLine' })],
     }),
-    default: new Header({ children: [names, ...mark] }),
+    default: new Header({ children: [names] }),
   }
 }
 

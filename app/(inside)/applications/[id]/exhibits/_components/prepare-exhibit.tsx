@@ -28,9 +28,10 @@ interface PrepareExhibitProps {
 export function PrepareExhibit(props: PrepareExhibitProps) {
   const [open, setOpen] = useState(false)
   const next = nextNo(props.revisions)
+  const isOtherMove = openOf(props.revisions)?.outOfStep === null
   return (
     <>
-      <Button look="primary" onClick={() => setOpen(true)}>
+      <Button look={isOtherMove ? 'plain' : 'primary'} onClick={() => setOpen(true)}>
         Prepare revision {next}
       </Button>
       <Dialog
@@ -49,6 +50,11 @@ function nextNo(revisions: readonly ExhibitRevision[]): number {
   return 1 + Math.max(0, ...revisions.map((one) => one.revision))
 }
 
+/** The revision that waits to be checked or issued. */
+function openOf(revisions: readonly ExhibitRevision[]): ExhibitRevision | undefined {
+  return revisions.find((one) => one.state === 'draft' || one.state === 'checked')
+}
+
 function PrepareForm(props: PrepareExhibitProps & { onDone: () => void }) {
   const { applicationId, calculations, revisions, reader, onDone } = props
   const client = useQueryClient()
@@ -56,7 +62,7 @@ function PrepareForm(props: PrepareExhibitProps & { onDone: () => void }) {
   const [id] = useState(newId)
   const [no, setNo] = useState(calculations[0]?.no ?? 0)
   const isSynthetic = calculations.find((one) => one.no === no)?.synthetic ?? false
-  const open = revisions.find((one) => one.state === 'draft' || one.state === 'checked')
+  const open = openOf(revisions)
   const last = revisions[0]
 
   const form = useFormCall(async (values) => {

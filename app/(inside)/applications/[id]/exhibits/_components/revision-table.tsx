@@ -1,10 +1,12 @@
 'use client'
 
+import Link from 'next/link'
 import { DocumentCell } from '@/app/(inside)/applications/[id]/exhibits/_components/document-cell'
 import { dayWords, type Reader } from '@/app/(inside)/applications/[id]/exhibits/_components/reader'
 import { RevisionActs } from '@/app/(inside)/applications/[id]/exhibits/_components/revision-acts'
 import { type Column, DataTable } from '@/components/ui/data-table'
 import { StateWord, type Tone } from '@/components/ui/state-word'
+import { routes } from '@/lib/routes'
 import type { ExhibitRevision } from '@/lib/schemas/exhibit'
 
 interface RevisionTableProps {
@@ -75,12 +77,15 @@ function toneOf({ state, outOfStep }: ExhibitRevision): Tone {
 }
 
 function What({ row }: { row: ExhibitRevision }) {
-  const { what, calculation, weatherReason } = row
+  const { what, calculation, weatherReason, applicationId } = row
   return (
     <>
       <p>{what}</p>
       <p className="cap mt-0.5">
-        calculation no. {calculation.no}, design revision {calculation.designNo}
+        <Link className="underline" href={routes.calculation(applicationId, calculation.no)}>
+          calculation no. {calculation.no}
+        </Link>
+        , design revision {calculation.designNo}
         {weatherReason && `; synthetic year: ${weatherReason}`}
       </p>
     </>
