@@ -119,7 +119,10 @@ test('A request goes from its start to an acknowledged notice, each step by whos
     const proven = facts.find((fact) => fact.step === 'completeness')
     expect(proven).toMatchObject({ outcome: 'complete', sentOn, receivedOn, channel: 'letter' })
     expect(proven?.evidence.map((one) => one.entrySubject)).toContain(subject)
-    expect(proven?.evidence.some((one) => one.fileSha256 !== null), 'the scan proves it').toBe(true)
+    expect(
+      proven?.evidence.some((one) => one.fileSha256 !== null),
+      'the scan proves it',
+    ).toBe(true)
   })
 
   await test.step('The clock stands on the day that a count of its own gives', async () => {

@@ -8,7 +8,7 @@ import { Calendar, luxonLocalizer, type CalendarProps, type View } from 'react-b
 import { AgendaDate, AgendaEntry } from '@/app/(inside)/calendar/_components/agenda-entry'
 import { CalendarTools } from '@/app/(inside)/calendar/_components/calendar-tools'
 import { DayHead } from '@/app/(inside)/calendar/_components/day-head'
-import { MonthEntry } from '@/app/(inside)/calendar/_components/month-entry'
+import { MonthCell, MonthEntry } from '@/app/(inside)/calendar/_components/month-entry'
 import { agendaDays, calendarEvents } from '@/lib/client/calendar'
 import { dateOfCivil, civilOfDate } from '@/lib/client/widget-date'
 import type { CivilDate } from '@/lib/domain/clocks/civil-date'
@@ -76,6 +76,7 @@ export function CalendarView({ on, view, filter, answer }: CalendarViewProps) {
           <DayHead date={date} month={on} closed={closed.get(civilOfDate(date))} />
         ),
       },
+      eventWrapper: MonthCell,
       agenda: { event: AgendaEntry, date: AgendaDate },
     }),
     [closed, on],

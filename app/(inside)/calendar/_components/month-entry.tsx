@@ -1,5 +1,6 @@
 import Link from 'next/link'
-import type { EventProps } from 'react-big-calendar'
+import type { ReactNode } from 'react'
+import type { EventProps, EventWrapperProps } from 'react-big-calendar'
 import type { WidgetEntry } from '@/app/(inside)/calendar/_components/calendar-view'
 import { Contact } from '@/app/(inside)/calendar/_components/contact'
 import { entryWords } from '@/components/calendar/entry-words'
@@ -17,4 +18,13 @@ export function MonthEntry({ event: { event } }: EventProps<WidgetEntry>) {
       <span>{entryWords(event)}</span>
     </Link>
   )
+}
+
+interface MonthCellProps extends Partial<EventWrapperProps<WidgetEntry>> {
+  children?: ReactNode
+}
+
+/** The cell that a row of the month has to hold: the widget names its rows, but not their cells. */
+export function MonthCell({ children }: MonthCellProps) {
+  return <div role="cell">{children}</div>
 }
