@@ -50,7 +50,7 @@ export function DesignDesk(props: DesignDeskProps) {
   )
   const chosenWeather = weather.find((one) => one.id === weatherId)
   const { design, errors } = useMemo(() => readDraft(draft), [draft])
-  const checks = useMemo(() => (design ? checksOf(design) : []), [design])
+  const checks = useMemo(() => readableChecks(draft.body), [draft.body])
   const { shown, problem } = useYear(weatherId, design)
   const upload = useWeatherUpload((one) => {
     setKept((before) => [one, ...before])
@@ -148,6 +148,10 @@ const SteadyLists = memo(KeptLists)
 const isCurrent = (one: CalculationSummary) => one.engineVersion === ENGINE_VERSION
 
 const has = (list: readonly Weather[], one: Weather) => list.some(({ id }) => id === one.id)
+
+/** The checks that a design with a fault in another field still allows. */
+const readableChecks = (body: DesignBody) =>
+  checksOf(body).filter(({ text }) => !/NaN|∞/.test(text))
 
 /** Where kW and kVA of an inverter were one figure, they stay so. */
 function follow(

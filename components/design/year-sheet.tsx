@@ -43,9 +43,11 @@ export function YearSheet({ shown, plant, waiting, seq, stale }: YearSheetProps)
               <DurationPart {...shown} />
               <MonthsPart {...shown} />
             </div>
-            <div className={clsx(look, 'gap-7')}>
-              <HoursPart {...shown} />
-              <YearFigures {...shown} />
+            <div className="grid min-w-0 content-start gap-7">
+              <div className={clsx(look, 'gap-7')}>
+                <HoursPart {...shown} />
+                <YearFigures {...shown} />
+              </div>
               <Caution>
                 Estimate for the application only. A licensed engineer reviews the design; the
                 utility’s requirements and local code come first.
