@@ -153,11 +153,13 @@ describe('making the document', () => {
     await work()
   })
 
-  test('a worker that starts asks for every document that is waited for', async () => {
+  test('a worker that starts takes over from one that was killed over a document', async () => {
     const { id } = await prepare(await ground())
     await database().db.execute(
-      sql`delete from graphile_worker._private_jobs where key = ${`renderExhibit:${id}`}`,
+      sql`update graphile_worker._private_jobs set locked_by = 'killed', locked_at = now(), attempts = 1 where key = ${`renderExhibit:${id}`}`,
     )
+    await work()
+    expect(await getExhibitRevision(by('engineer'), id)).toMatchObject({ render: 'waiting' })
     expect(await requeueRenders(jobContext('renderExhibit'))).toBe(1)
     await work()
     expect(await getExhibitRevision(by('engineer'), id)).toMatchObject({ render: 'done' })
