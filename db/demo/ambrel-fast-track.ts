@@ -12,8 +12,8 @@ function sableOrchard(d: DemoDates): DemoProject {
   return {
     name: 'Sable Orchard',
     town: 'Pellow Springs',
-    latitude: 38.85,
-    longitude: -106.95,
+    latitude: 39.68,
+    longitude: -110.92,
     organization: 'ave',
     procedure: 'federal_fast_track',
     requestNo: 'AVE-D-0295',
@@ -56,8 +56,8 @@ function harrowLane(d: DemoDates): DemoProject {
   return {
     name: 'Harrow Lane',
     town: 'Sorrel Wells',
-    latitude: 38.61,
-    longitude: -107.2,
+    latitude: 39.44,
+    longitude: -111.22,
     organization: 'ave',
     procedure: 'federal_fast_track',
     requestNo: 'AVE-D-0317',
@@ -88,8 +88,8 @@ function quillmarkMeadow(): DemoProject {
   return {
     name: 'Quillmark Meadow',
     town: 'Pellow Springs',
-    latitude: 38.88,
-    longitude: -106.9,
+    latitude: 39.7,
+    longitude: -110.9,
     organization: 'ave',
     procedure: 'federal_fast_track',
     terms: {
@@ -113,8 +113,8 @@ function marshKettle(d: DemoDates): DemoProject {
   return {
     name: 'Marsh Kettle',
     town: 'Brannock Mills',
-    latitude: 38.48,
-    longitude: -107.6,
+    latitude: 39.03,
+    longitude: -111.6,
     organization: 'ave',
     procedure: 'federal_fast_track',
     requestNo: 'AVE-D-0288',

@@ -11,8 +11,8 @@ function juniperFlat(d: DemoDates): DemoProject {
   return {
     name: 'Juniper Flat',
     town: 'Sorrel Wells',
-    latitude: 38.6,
-    longitude: -107.2,
+    latitude: 39.45,
+    longitude: -111.16,
     organization: 'ave',
     procedure: 'outline',
     requestNo: 'AVE-26C-014',
@@ -90,8 +90,8 @@ function mesaLarga(d: DemoDates): DemoProject {
   return {
     name: 'Mesa Larga',
     town: 'Vantry',
-    latitude: 36.9,
-    longitude: -102.4,
+    latitude: 38.21,
+    longitude: -99.4,
     organization: 'cbto',
     procedure: 'outline',
     requestNo: 'CB-A-0912',

@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto'
 import { DateTime } from 'luxon'
 import { assignments } from '@/db/schema/applications'
 import { demoPeople, type DemoOrganization, type DemoPerson } from '@/db/demo/organizations'
+import { seedExhibits } from '@/db/demo/exhibits'
 import { demoProjects } from '@/db/demo/projects'
 import { seedDesigns } from '@/db/demo/seed-designs'
 import { seedHouse, type SeededHouse } from '@/db/demo/seed-house'
@@ -35,6 +36,12 @@ export async function seedDemo({ db, now, password }: SeedOptions): Promise<void
   await seedDesigns({
     engineerAt: (instant) => contextOf(db, house, 'engineer', instant),
     now,
+    places,
+  })
+  await seedExhibits({
+    db,
+    now,
+    personAt: (who, instant) => contextOf(db, house, who, instant),
     places,
   })
 }

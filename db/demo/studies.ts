@@ -10,8 +10,8 @@ function oldMillFerry(d: DemoDates): DemoProject {
   return {
     name: 'Old Mill Ferry',
     town: 'Brannock Mills',
-    latitude: 38.46,
-    longitude: -107.63,
+    latitude: 39.02,
+    longitude: -111.62,
     organization: 'ave',
     procedure: 'federal_study_process',
     requestNo: 'AVE-D-0310',
@@ -33,6 +33,7 @@ function oldMillFerry(d: DemoDates): DemoProject {
           text: 'The portal stamped it 17:20, after the closing hour of 17:00.',
         },
       }),
+      theirs(d.after(dayZero, 2), 'acknowledge', 'acknowledged'),
     ],
     expects: [{ step: 'completeness', dueOn: d.day(2) }],
   }
@@ -49,8 +50,8 @@ function ferrisCut(d: DemoDates): DemoProject {
   return {
     name: 'Ferris Cut',
     town: 'Sorrel Wells',
-    latitude: 38.63,
-    longitude: -107.24,
+    latitude: 39.48,
+    longitude: -111.21,
     organization: 'ave',
     procedure: 'federal_study_process',
     requestNo: 'AVE-T-0288',

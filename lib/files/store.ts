@@ -20,7 +20,7 @@ export interface FileStore {
   check(): Promise<void>
 }
 
-/** The store of this process: the folder LINESIDE_FILES_DIR, `.local/files` if it is not set. */
+/** The store of this process: the folder FILES_DIR, `.local/files` if it is not set. */
 export function getFileStore(): FileStore {
-  return createFolderStore(path.resolve(process.env.LINESIDE_FILES_DIR ?? '.local/files'))
+  return createFolderStore(path.resolve(process.env.FILES_DIR ?? '.local/files'))
 }

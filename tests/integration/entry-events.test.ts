@@ -26,7 +26,7 @@ let utility: Awaited<ReturnType<typeof createBareUtility>>
 
 beforeAll(async () => {
   folder = await mkdtemp(path.join(tmpdir(), 'lineside-entries-'))
-  process.env.LINESIDE_FILES_DIR = folder
+  process.env.FILES_DIR = folder
   liaison = await createSignedPerson(['liaison'])
   utility = await createBareUtility()
 })

@@ -41,19 +41,19 @@ import {
 
 const database = useTestDatabase()
 const now = '2026-11-30T17:00:00Z'
-const filesBefore = process.env.LINESIDE_FILES_DIR
+const filesBefore = process.env.FILES_DIR
 let folder: string
 let house: SeededHouse
 
 beforeAll(async () => {
   folder = await mkdtemp(path.join(tmpdir(), 'exhibits-'))
-  process.env.LINESIDE_FILES_DIR = folder
+  process.env.FILES_DIR = folder
   house = await makeHouse(database().db)
 })
 
 afterAll(async () => {
-  if (filesBefore === undefined) delete process.env.LINESIDE_FILES_DIR
-  else process.env.LINESIDE_FILES_DIR = filesBefore
+  if (filesBefore === undefined) delete process.env.FILES_DIR
+  else process.env.FILES_DIR = filesBefore
   await rm(folder, { recursive: true, force: true })
 })
 
@@ -171,9 +171,9 @@ describe('making the document', () => {
     await db.execute(
       sql`update graphile_worker._private_jobs set attempts = max_attempts - 1 where key = ${`renderExhibit:${id}`}`,
     )
-    process.env.LINESIDE_FILES_DIR = '/dev/null/nowhere'
+    process.env.FILES_DIR = '/dev/null/nowhere'
     await work()
-    process.env.LINESIDE_FILES_DIR = folder
+    process.env.FILES_DIR = folder
     const failed = await getExhibitRevision(by('engineer'), id)
     expect(failed.render).toBe('failed')
     expect(failed.renderError).not.toBe('')

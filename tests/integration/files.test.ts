@@ -22,7 +22,7 @@ let executive: SignedPerson
 
 beforeAll(async () => {
   folder = await mkdtemp(path.join(tmpdir(), 'lineside-files-'))
-  process.env.LINESIDE_FILES_DIR = folder
+  process.env.FILES_DIR = folder
   liaison = await createSignedPerson(['liaison'])
   executive = await createSignedPerson(['executive'])
 })

@@ -38,7 +38,7 @@ let executive: SignedPerson
 
 beforeAll(async () => {
   folder = await mkdtemp(path.join(tmpdir(), 'lineside-weather-'))
-  process.env.LINESIDE_FILES_DIR = folder
+  process.env.FILES_DIR = folder
   engineer = await createSignedPerson(['engineer'])
   executive = await createSignedPerson(['executive'])
 })
