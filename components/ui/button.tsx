@@ -1,6 +1,7 @@
 'use client'
 
-import { type ComponentProps, type MouseEvent, useRef, useState } from 'react'
+import { clsx } from 'clsx'
+import { type ComponentProps, type MouseEvent, useRef, useState, useSyncExternalStore } from 'react'
 import { useFormStatus } from 'react-dom'
 import { type ButtonLook, buttonClass } from '@/components/ui/button-class'
 
@@ -14,6 +15,17 @@ export interface ButtonProps extends Omit<ComponentProps<'button'>, 'onClick'> {
   onClick?: (event: MouseEvent<HTMLButtonElement>) => void | Promise<unknown>
 }
 
+const never = () => () => undefined
+
+/** False until the page's script has come: a form sent before that is sent by nobody's code. */
+function useAwake(): boolean {
+  return useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  )
+}
+
 /** A press that cannot be doubled: while its work runs a second press is ignored. */
 export function Button({
   look = 'plain',
@@ -23,8 +35,10 @@ export function Button({
   children,
   type = 'button',
   onClick,
+  disabled,
   ...rest
 }: ButtonProps) {
+  const isAsleep = !useAwake() && type === 'submit'
   const running = useRef(false)
   const [isRunning, setRunning] = useState(false)
   const { pending } = useFormStatus()
@@ -51,7 +65,8 @@ export function Button({
     <button
       {...rest}
       type={type}
-      className={buttonClass(look, className)}
+      disabled={disabled || isAsleep}
+      className={buttonClass(look, clsx(className, isAsleep && 'disabled:opacity-100!'))}
       aria-disabled={isBusy || undefined}
       aria-busy={isBusy || undefined}
       onClick={press}

@@ -119,6 +119,7 @@ test('A tab that somebody overtook says what happened meanwhile and keeps what w
   await record(stale).click()
   const refusal = stale.getByRole('alert')
   await expect(refusal).toContainText('Nothing was saved: the application has moved on.')
+  await expect(refusal).toContainText('Maren Oxley: ')
   await expect(stale.getByLabel('Note')).toHaveValue('typed in the stale tab')
   expect(await factsOf(dov, id, 'completeness')).toHaveLength(1)
   await refusal.getByRole('button', { name: 'Load the new state' }).click()
@@ -266,4 +267,14 @@ test('Nobody gets in by address without a session, and comes back to it after si
   await signInWith(page, 'engineer@demo.test', demoPassword())
   await page.reload()
   await expect(page).toHaveURL(/\/pipeline\?standing=all$/)
+})
+
+test('A form takes no press before its script has come, so that nothing typed is lost', async ({
+  browser,
+}) => {
+  const context = await browser.newContext({ javaScriptEnabled: false })
+  const page = await context.newPage()
+  await page.goto(routes.signIn())
+  await expect(page.getByRole('button', { name: 'Sign in' })).toBeDisabled()
+  await context.close()
 })
