@@ -3,7 +3,7 @@ import { indexFacts, type FactIndex } from '@/lib/domain/clocks/fact-index'
 import { termsOf, type Fact } from '@/lib/domain/clocks/facts'
 import { rulesFor, type Graph, type Node } from '@/lib/domain/clocks/graph'
 import { makeNode } from '@/lib/domain/clocks/node'
-import { stepOf, type ProcedureBody, type Step } from '@/lib/domain/clocks/procedure'
+import { loopOf, stepOf, type ProcedureBody, type Step } from '@/lib/domain/clocks/procedure'
 import { roundsInOrder, roundsOf } from '@/lib/domain/clocks/rounds'
 import { sayDate } from '@/lib/domain/clocks/say'
 import type { Parties, Schedule, ScheduledItem } from '@/lib/domain/clocks/schedule-types'
@@ -78,7 +78,7 @@ function graphOf(body: ProcedureBody, parties: Parties, index: FactIndex): Graph
 function overtaken(graph: Graph, node: Node, step: Step): Node {
   if (!step.overtakenBy || (node.status !== 'open' && node.status !== 'waiting')) return node
   const by = step.overtakenBy
-    .map((key) => graph.node(key, Math.max(1, graph.instances(key))))
+    .flatMap((key) => laterRounds(graph, step, node.instance, key))
     .find((later) => later.status === 'done')
   if (!by) return node
   return {
@@ -88,6 +88,14 @@ function overtaken(graph: Graph, node: Node, step: Step): Node {
     onLine: false,
     derivation: [...node.derivation, { kind: 'note', text: `Overtaken by: ${by.title}.` }],
   }
+}
+
+/** Any round of a later step; within one loop those from the same round on. */
+function laterRounds(graph: Graph, step: Step, instance: number, key: string): Node[] {
+  const loop = loopOf(graph.body, step.key)
+  const first = loop && loop === loopOf(graph.body, key) ? instance : 1
+  const last = Math.max(first, graph.instances(key))
+  return Array.from({ length: last - first + 1 }, (_, at) => graph.node(key, first + at))
 }
 
 function withdrawnNode(index: FactIndex, node: Node): Node {

@@ -1,3 +1,4 @@
+import { federalCluster } from '@/lib/domain/clocks/library/cluster'
 import { federalFastTrack } from '@/lib/domain/clocks/library/fast-track'
 import { stateLevelTwo } from '@/lib/domain/clocks/library/level-two'
 import { outlineProcedure } from '@/lib/domain/clocks/library/outline'
@@ -15,5 +16,6 @@ export const libraryProcedures: LibraryProcedure[] = [
   federalFastTrack(),
   federalStudyProcess(),
   stateLevelTwo(),
+  federalCluster(),
   outlineProcedure(),
 ].map((body) => ({ key: body.key, title: body.title, body }))
