@@ -51,6 +51,7 @@ export const routes = {
     `/applications/${part(applicationId)}/design/calculations/${no}`,
   exhibit: (applicationId: string, exhibitId: string) =>
     `/applications/${part(applicationId)}/exhibits/${part(exhibitId)}`,
+  countDays: (filter?: Filter) => withQuery('/count-days', filter),
   studyGroup: (id: string) => `/study-groups/${part(id)}`,
   queueLists: () => '/queue-lists',
   equipment: () => '/equipment',

@@ -1,4 +1,4 @@
-import { desc, eq, or } from 'drizzle-orm'
+import { asc, desc, eq, or } from 'drizzle-orm'
 import { calendarRevisions, calendars } from '@/db/schema/organizations'
 import type { BusinessCalendar } from '@/lib/domain/clocks/calendar'
 import { count } from '@/lib/domain/clocks/count'
@@ -16,6 +16,17 @@ export async function countClock(ctx: Context, input: CountInputBody): Promise<C
   const calendar = await findCalendar(ctx, wanted ?? 'federal')
   const { dueOn, derivation, account } = count(rest, calendar)
   return { dueOn, derivation, account }
+}
+
+/** The calendars a count may go by: the federal one, then the organizations'. */
+export async function listCalendarChoices(ctx: Context): Promise<{ key: string; name: string }[]> {
+  authorize(ctx, 'calendar.read')
+  const rows = await ctx.db
+    .select({ key: calendars.key, name: calendars.name })
+    .from(calendars)
+    .orderBy(asc(calendars.name))
+  const others = rows.filter((row) => row.key !== 'federal')
+  return [{ key: 'federal', name: federalCalendar.name }, ...others]
 }
 
 async function findCalendar(ctx: Context, wanted: string): Promise<BusinessCalendar> {

@@ -125,6 +125,7 @@ export const services: Record<string, Action | ServiceRule> = {
   'calculations.getCalculation': 'calculation.read',
   'calculations.listCalculations': 'calculation.read',
   'counting.countClock': 'clock.count',
+  'counting.listCalendarChoices': 'calendar.read',
   'designs.getDesignRevision': 'design.read',
   'designs.listDesignRevisions': 'design.read',
   'designs.reviseDesign': 'design.write',

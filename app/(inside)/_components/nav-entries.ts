@@ -17,6 +17,7 @@ const entries: readonly Entry[] = [
   { label: 'Due', href: routes.due(), onPhoneBar: true, needs: 'obligation.read' },
   { label: 'Pipeline', href: routes.pipeline(), onPhoneBar: true, needs: 'application.read' },
   { label: 'Calendar', href: routes.calendar(), onPhoneBar: true, needs: 'calendar.read' },
+  { label: 'Day counter', href: routes.countDays(), onPhoneBar: false, needs: 'clock.count' },
   { label: 'Notices', href: routes.notices(), onPhoneBar: false, needs: 'notice.read' },
   { label: 'People', href: routes.people(), onPhoneBar: false, needs: 'person.write' },
 ]
