@@ -78,6 +78,7 @@ const accessible = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa']
 async function axeFindings(page: Page): Promise<string[]> {
   // A drawing is one image with its words; its inner parts are hundreds and say nothing more.
   const { violations } = await new AxeBuilder({ page })
+    .options({ resultTypes: ['violations'] })
     .withTags(accessible)
     .exclude('svg > *')
     .analyze()
