@@ -129,12 +129,15 @@ function countedDue(
   }
   const result = countedDays(
     {
-      start: from.afterHours ? businessDayFrom(rules.calendar, addDays(from.on, 1), 1) : from.on,
+      start:
+        from.afterHours && !clock.fromDayItself
+          ? businessDayFrom(rules.calendar, addDays(from.on, 1), 1)
+          : from.on,
       length: clock.length,
       unit: clock.unit,
       direction: clock.direction,
       roll: clock.roll,
-      receipt: rules.receiptRule,
+      receipt: clock.fromDayItself ? 'as_is' : rules.receiptRule,
       includeStart: clock.includeStart,
       stopped: stoppedDay(stops),
     },

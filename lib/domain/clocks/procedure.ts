@@ -49,6 +49,11 @@ export interface ClockRule {
   /** Counted from here instead of from the start of the step. */
   from?: StepRef
   includeStart?: boolean
+  /**
+   * What it counts from is no receipt (a window, a meeting, a tender): that day is day 0 as it
+   * stands, whatever the utility's rule for what it receives on a closed day or after hours.
+   */
+  fromDayItself?: boolean
   roll?: Roll
   /** False: the clock runs to the end of the day, not to the closing hour. */
   closesAtHour?: boolean

@@ -63,8 +63,8 @@ function negotiation(rules: ClusterRules): Step[] {
       short: 'Negotiation',
       stage,
       party: 'both',
-      start: { mode: 'all', of: [{ step: 'final_report' }] },
-      clocks: [rules.calendarDays(60)],
+      start: { mode: 'all', of: [{ step: 'final_report', date: 'sent' }] },
+      clocks: [rules.calendarDays(60, { fromDayItself: true })],
       outcomes: [
         { key: 'agreed', title: 'Agreed' },
         { key: 'impasse', title: 'Ended without agreement' },
@@ -119,8 +119,15 @@ function gateThree(rules: ClusterRules): Step {
     stage,
     party: 'applicant',
     kind: 'gate',
-    start: { mode: 'all', of: [{ step: fromDraft ? 'lgia_draft' : 'final_agreement' }] },
-    clocks: [fromDraft ? rules.calendarDays(60) : { length: 15, unit: 'business_day' }],
+    start: {
+      mode: 'all',
+      of: [{ step: fromDraft ? 'lgia_draft' : 'final_agreement', date: 'sent' }],
+    },
+    clocks: [
+      fromDraft
+        ? rules.calendarDays(60, { fromDayItself: true })
+        : { length: 15, unit: 'business_day' },
+    ],
     obligations: [
       { key: 'agreement', title: 'Agreement signed, or unsigned filing asked', what: 'document' },
       { key: 'land', title: 'Continued site control', what: 'site_control' },
@@ -150,7 +157,7 @@ function gateThree(rules: ClusterRules): Step {
       'LG-34',
       '11.3',
       'medium',
-      'The time to sign is LG-32, 11.2. 20 % read in a law journal note; less what is held from memory.',
+      'The time to sign is LG-32, 11.2, counted from the tender and not its receipt. 20 % read in a law journal note; less what is held from memory.',
     ),
   })
 }

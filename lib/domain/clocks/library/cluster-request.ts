@@ -41,7 +41,7 @@ function windowSteps(rules: ClusterRules): Step[] {
       party: 'operator',
       kind: 'window',
       start: { mode: 'all', of: [{ step: 'window_open' }] },
-      clocks: [rules.calendarDays(rules.windowDays)],
+      clocks: [rules.calendarDays(rules.windowDays, { fromDayItself: true })],
       outcomes: [{ key: 'closed', title: 'Closed' }],
       onMiss: {
         effect: 'presumed',

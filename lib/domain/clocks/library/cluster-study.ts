@@ -32,7 +32,7 @@ export function clusterEngagement(rules: ClusterRules): Step[] {
       title: 'Post the list of valid requests',
       short: 'List',
       party: 'operator',
-      clocks: [{ length: 10, unit: 'business_day' }],
+      clocks: [{ length: 10, unit: 'business_day', fromDayItself: true }],
       outcomes: [{ key: 'posted', title: 'Posted' }],
       overtakenBy: ['cluster_agreement', 'cluster_report'],
       source: lgip.memory('LG-09', '3.4.5'),
@@ -45,7 +45,7 @@ export function clusterEngagement(rules: ClusterRules): Step[] {
       party: 'operator',
       needs: { outcome: 'validity', in: ['valid'] },
       expected: true,
-      clocks: [{ length: 5, unit: 'business_day' }],
+      clocks: [{ length: 5, unit: 'business_day', fromDayItself: true }],
       outcomes: [{ key: 'sent', title: 'Agreement sent' }],
       overtakenBy: ['cluster_agreement', 'cluster_report'],
       source: lgip.memory('LG-07', '7.1', 'medium'),
@@ -68,7 +68,7 @@ export function clusterEngagement(rules: ClusterRules): Step[] {
       short: 'Engagement closes',
       party: 'operator',
       kind: 'window',
-      clocks: [rules.calendarDays(60)],
+      clocks: [rules.calendarDays(60, { fromDayItself: true })],
       outcomes: [{ key: 'closed', title: 'Closed' }],
       onMiss: {
         effect: 'presumed',
@@ -182,7 +182,7 @@ function reportStep(rules: ClusterRules): Step {
     },
     clocks: [
       rules.calendarDays(150, { when: { instanceAbove: 1 }, onMiss: rules.late('$2,000') }),
-      rules.calendarDays(150),
+      rules.calendarDays(150, { fromDayItself: true }),
     ],
     outcomes: [{ key: 'issued', title: 'Issued and posted' }],
     onMiss: rules.late('$1,000'),
@@ -240,7 +240,7 @@ function gateOne(rules: ClusterRules): Step {
     party: 'applicant',
     kind: 'gate',
     start: { mode: 'all', of: [{ step: 'report_meeting' }] },
-    clocks: [rules.calendarDays(20)],
+    clocks: [rules.calendarDays(20, { fromDayItself: true })],
     obligations: [
       { key: 'land', title: 'Continued site control', what: 'site_control' },
       {
@@ -276,7 +276,7 @@ function decisionStep(rules: ClusterRules): Step {
     stage: 'Cluster study',
     party: 'operator',
     start: { mode: 'all', of: [{ step: 'report_meeting' }] },
-    clocks: [rules.calendarDays(30)],
+    clocks: [rules.calendarDays(30, { fromDayItself: true })],
     outcomes: [
       { key: 'none', title: 'No restudy' },
       { key: 'restudy', title: 'Restudy' },
