@@ -31,6 +31,10 @@ const inside: Record<string, Addresses> = {
   ],
   '(inside)/pipeline/new': () => [routes.newApplication()],
   '(inside)/calendar': () => [routes.calendar(), routes.calendar({ view: 'agenda' })],
+  '(inside)/count-days': () => [
+    routes.countDays(),
+    routes.countDays({ start: '2026-05-23', length: 3, unit: 'business_day' }),
+  ],
   '(inside)/notices': () => [routes.notices()],
   '(inside)/people': () => [routes.people()],
   '(inside)/me': () => [routes.settings()],
