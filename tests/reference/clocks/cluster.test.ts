@@ -493,6 +493,31 @@ describe('Tansy Ridge, before its window opens', () => {
   })
 })
 
+describe('a window that closes on a closed day', () => {
+  // Opened 2 November 2026: closes 17 December; engagement ends on Washington's Birthday.
+  const facts = [
+    on('2026-11-02', 'window_open', 'opened'),
+    on('2026-11-10', 'file', 'filed'),
+    on('2026-11-16', 'validity', 'valid'),
+    on('2026-12-17', 'window_close', 'closed'),
+    on('2026-12-22', 'cluster_tender', 'sent'),
+  ]
+  it('what is due by its closing is not due a day after it', () => {
+    expectDue(pro, ave, facts, [
+      ['engagement_close', '2027-02-15'],
+      ['group_scoping', '2027-02-15'],
+      ['cluster_agreement', '2027-02-15'],
+    ])
+  })
+
+  it('where calendar days roll, both roll to the same day', () => {
+    expectDue(rolling, cbto, facts, [
+      ['engagement_close', '2027-02-16'],
+      ['cluster_agreement', '2027-02-16'],
+    ])
+  })
+})
+
 // Christmas 2027 and New Year 2028 are Saturdays: 24 and 31 December are closed. 29 February 2028.
 describe('over a Saturday Christmas and the leap day of 2028', () => {
   it('a window that opens on 18 January closes on 3 March, and engagement on 2 May', () => {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { libraryProcedures } from '@/lib/domain/clocks/library/all'
-import type { Loop, ProcedureBody, Step } from '@/lib/domain/clocks/procedure'
+import type { Loop, MoneyRule, ProcedureBody, Step } from '@/lib/domain/clocks/procedure'
 import { schedule } from '@/lib/domain/clocks/schedule'
 import { validateProcedure } from '@/lib/domain/clocks/validate'
 import { partiesOf } from './told'
@@ -81,6 +81,9 @@ describe('a sound procedure', () => {
     expect(validateProcedure(body(steps, [loop]))).toEqual([])
   })
 })
+
+const owing = (target: MoneyRule) =>
+  step('a', { obligations: [{ key: 'fee', title: 'Fee', what: 'money', target }] })
 
 type Case = [rule: string, faulty: ProcedureBody, field: string, words: RegExp, at?: string]
 
@@ -215,6 +218,51 @@ const cases: Case[] = [
     body([file, step('a', { onMiss: { effect: 'presumed', outcome: 'lost', say: '' } })]),
     'onMiss',
     /"lost"/,
+    'a',
+  ],
+  [
+    'a money bracket above one without an upper edge',
+    body([file, owing({ kind: 'bracketed', brackets: [{ plusMinor: 1 }, { belowMw: 80 }] })]),
+    'obligations.fee.target',
+    /last bracket, and only it, has no upper edge/,
+    'a',
+  ],
+  [
+    'money brackets that do not rise',
+    body([
+      file,
+      owing({ kind: 'bracketed', brackets: [{ belowMw: 80 }, { belowMw: 80 }, { plusMinor: 1 }] }),
+    ]),
+    'obligations.fee.target',
+    /must rise/,
+    'a',
+  ],
+  [
+    'a share of nothing',
+    body([file, owing({ kind: 'share', percent: 0 })]),
+    'obligations.fee.target',
+    /Found 0 %/,
+    'a',
+  ],
+  [
+    'part of a cent in a rule inside another',
+    body([file, owing({ kind: 'multiple', times: 2, of: { kind: 'fixed', amountMinor: 0.5 } })]),
+    'obligations.fee.target',
+    /amountMinor: found 0.5; allowed are whole minor units/,
+    'a',
+  ],
+  [
+    'an amount on what is not money',
+    body([
+      file,
+      step('a', {
+        obligations: [
+          { key: 'fee', title: 'Fee', what: 'data', target: { kind: 'fixed', amountMinor: 1 } },
+        ],
+      }),
+    ]),
+    'obligations.fee.target',
+    /only money has one/,
     'a',
   ],
   ['no step that files', { ...body([file]), filedStep: '' }, 'filedStep', /Name the step/],

@@ -104,6 +104,7 @@ function constructionSteps(construction: Expr): Step[] {
         { from: { step: 'work_start', date: 'scheduled' }, length: 0, unit: 'calendar_day' },
       ],
       outcomes: [{ key: 'started', title: 'Started' }],
+      typical: { shortest: 20, likely: 45, longest: 90 },
       source: sgia.memory('SG-71', '6.2', 'high', 'Dates are those of the agreement’s milestones.'),
     }),
     stepWith({
@@ -115,6 +116,7 @@ function constructionSteps(construction: Expr): Step[] {
       owner: 'engineer',
       start: { mode: 'all', of: [{ step: 'sign' }] },
       outcomes: [{ key: 'complete', title: 'Mechanically complete' }],
+      typical: { shortest: 70, likely: 190, longest: 390 },
       source: sgia.memory('SG-71', '6.2'),
     }),
   ]

@@ -41,6 +41,7 @@ function securityStep(rules: ClusterRules): Step {
       say: 'The utility need not start its work.',
       first: 'Tell the bank and ask for a new start date.',
     },
+    typical: { shortest: 20, likely: 40, longest: 80 },
     source: lgia.memory(
       'LGIA-11.5',
       '11.5',
@@ -58,7 +59,14 @@ const works: Step[] = [
     stage: 'Construction',
     party: 'operator',
     start: { mode: 'all', of: [{ step: 'gate_3' }] },
-    clocks: [{ from: { step: 'work_start', date: 'scheduled' }, length: 0, unit: 'calendar_day' }],
+    clocks: [
+      {
+        from: { step: 'work_start', date: 'scheduled' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
+    ],
     outcomes: [{ key: 'started', title: 'Started' }],
     typical: { shortest: 30, likely: 60, longest: 90 },
     source: lgia.memory('LGIA-B', 'Appendix B'),
@@ -71,7 +79,12 @@ const works: Step[] = [
     party: 'operator',
     start: { mode: 'all', of: [{ step: 'work_start' }] },
     clocks: [
-      { from: { step: 'utility_built', date: 'scheduled' }, length: 0, unit: 'calendar_day' },
+      {
+        from: { step: 'utility_built', date: 'scheduled' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
     ],
     outcomes: [{ key: 'in_service', title: 'In service' }],
     typical: { shortest: 420, likely: 560, longest: 700 },
@@ -98,7 +111,14 @@ const energised: Step[] = [
     stage: 'Construction',
     party: 'operator',
     start: { mode: 'all', of: [{ step: 'utility_built' }, { step: 'built' }] },
-    clocks: [{ from: { step: 'backfeed', date: 'scheduled' }, length: 0, unit: 'calendar_day' }],
+    clocks: [
+      {
+        from: { step: 'backfeed', date: 'scheduled' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
+    ],
     outcomes: [{ key: 'given', title: 'Given' }],
     typical: { shortest: 7, likely: 21, longest: 30 },
     source: lgia.memory('LGIA-B', 'Appendix B', 'high', 'The in-service date of the agreement.'),
@@ -111,7 +131,14 @@ const energised: Step[] = [
     party: 'applicant',
     owner: 'engineer',
     start: { mode: 'all', of: [{ step: 'backfeed' }] },
-    clocks: [{ from: { step: 'first_sync', date: 'scheduled' }, length: 0, unit: 'calendar_day' }],
+    clocks: [
+      {
+        from: { step: 'first_sync', date: 'scheduled' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
+    ],
     outcomes: [{ key: 'synchronized', title: 'Synchronized' }],
     typical: { shortest: 45, likely: 75, longest: 90 },
     source: lgia.memory('LGIA-B', 'Appendix B'),
@@ -123,7 +150,14 @@ const energised: Step[] = [
     stage: 'Operation',
     party: 'applicant',
     start: { mode: 'all', of: [{ step: 'first_sync' }] },
-    clocks: [{ from: { step: 'operation', date: 'scheduled' }, length: 0, unit: 'calendar_day' }],
+    clocks: [
+      {
+        from: { step: 'operation', date: 'scheduled' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
+    ],
     outcomes: [{ key: 'operating', title: 'In operation' }],
     onMiss: {
       effect: 'extension',

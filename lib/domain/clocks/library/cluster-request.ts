@@ -27,7 +27,12 @@ function windowSteps(rules: ClusterRules): Step[] {
       party: 'operator',
       kind: 'window',
       clocks: [
-        { from: { step: 'window_open', date: 'scheduled' }, length: 0, unit: 'calendar_day' },
+        {
+          from: { step: 'window_open', date: 'scheduled' },
+          length: 0,
+          unit: 'calendar_day',
+          fromDayItself: true,
+        },
       ],
       outcomes: [{ key: 'opened', title: 'Opened' }],
       overtakenBy: ['window_close', 'cluster_agreement', 'cluster_report'],
@@ -62,7 +67,14 @@ function fileStep(rules: ClusterRules): Step {
     short: 'Filed',
     stage: 'Request',
     party: 'applicant',
-    clocks: [{ from: { step: 'window_close', date: 'due' }, length: 0, unit: 'calendar_day' }],
+    clocks: [
+      {
+        from: { step: 'window_close', date: 'due' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
+    ],
     obligations: [...filedDocuments, ...filedMoney(rules)],
     outcomes: [{ key: 'filed', title: 'Filed' }],
     onMiss: {

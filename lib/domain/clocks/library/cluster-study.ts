@@ -92,6 +92,7 @@ const byEngagementClose: Step['clocks'][number] = {
   from: { step: 'engagement_close', date: 'due' },
   length: 0,
   unit: 'calendar_day',
+  fromDayItself: true,
 }
 
 const agreementSteps: Step[] = [

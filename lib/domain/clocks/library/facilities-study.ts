@@ -159,6 +159,7 @@ const resultSteps: Step[] = [
     expected: true,
     start: { mode: 'all', of: [{ step: 'final_report' }] },
     outcomes: [{ key: 'agreed', title: 'Agreed in writing' }],
+    typical: { shortest: 5, likely: 15, longest: 30 },
     source: sgip.memory('SG-67', '3.5.7'),
   }),
   stepWith({

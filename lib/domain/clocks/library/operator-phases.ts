@@ -118,7 +118,12 @@ function requestSteps(options: OperatorPhasesOptions, days: Days): Step[] {
       party: 'operator',
       kind: 'window',
       clocks: [
-        { from: { step: 'window_open', date: 'scheduled' }, length: 0, unit: 'calendar_day' },
+        {
+          from: { step: 'window_open', date: 'scheduled' },
+          length: 0,
+          unit: 'calendar_day',
+          fromDayItself: true,
+        },
       ],
       outcomes: [{ key: 'opened', title: 'Opened' }],
       overtakenBy: ['window_close', 'phase_1_report'],
@@ -146,7 +151,14 @@ function requestSteps(options: OperatorPhasesOptions, days: Days): Step[] {
       title: 'File the request',
       short: 'Filed',
       party: 'applicant',
-      clocks: [{ from: { step: 'window_close', date: 'due' }, length: 0, unit: 'calendar_day' }],
+      clocks: [
+        {
+          from: { step: 'window_close', date: 'due' },
+          length: 0,
+          unit: 'calendar_day',
+          fromDayItself: true,
+        },
+      ],
       obligations: [
         { key: 'form', title: 'Application', what: 'document' },
         { key: 'models', title: 'Technical data and models', what: 'data', owner: 'engineer' },
@@ -299,7 +311,14 @@ const toOperation: Step[] = [
     stage: 'Operation',
     party: 'applicant',
     start: { mode: 'all', of: [{ step: 'built' }] },
-    clocks: [{ from: { step: 'operation', date: 'scheduled' }, length: 0, unit: 'calendar_day' }],
+    clocks: [
+      {
+        from: { step: 'operation', date: 'scheduled' },
+        length: 0,
+        unit: 'calendar_day',
+        fromDayItself: true,
+      },
+    ],
     outcomes: [{ key: 'operating', title: 'In operation' }],
     typical: { shortest: 60, likely: 90, longest: 150 },
     source,

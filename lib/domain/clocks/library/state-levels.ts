@@ -84,6 +84,7 @@ const levelStep: Step = stepWith({
     { key: 'level_2', title: 'Level 2: certified, by screens' },
     { key: 'level_3', title: 'Level 3: study' },
   ],
+  typical: { shortest: 0, likely: 5, longest: 15 },
   source: state.memory(
     'ST-01',
     'Levels',
@@ -93,7 +94,10 @@ const levelStep: Step = stepWith({
 })
 
 /** The review of a level: its title follows the level that the notice named. */
-function review(given: Pick<Step, 'key' | 'title' | 'needs' | 'source'>, days: number): Step {
+function review(
+  given: Pick<Step, 'key' | 'title' | 'needs' | 'source' | 'expected'>,
+  days: number,
+): Step {
   return stepWith({
     ...given,
     short: 'Review',
@@ -134,6 +138,7 @@ function levelTwo(days: number, supplementalDays: number): Step[] {
         key: 'level_two_review',
         title: 'Review at level 2 with the screens',
         needs: level('level_2'),
+        expected: true,
         source: state.adapted('ST-03', 'Level 2'),
       },
       days,

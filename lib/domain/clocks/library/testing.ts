@@ -29,6 +29,7 @@ export function testingToOperation(testNoticeDays: number): Step[] {
         say: 'No parallel operation before it is shown.',
         first: 'Send the certificate.',
       },
+      typical: { shortest: 60, likely: 180, longest: 380 },
       source: sgia.memory(
         'SG-79',
         '8.1',
@@ -46,6 +47,7 @@ export function testingToOperation(testNoticeDays: number): Step[] {
       clocks: [],
       outcomes: [{ key: 'authorized', title: 'Authorized in writing' }],
       onMiss: noticeDuty,
+      typical: { shortest: 3, likely: 10, longest: 30 },
       source: sgia.memory('SG-77', '2.2', 'high', 'No number; not to be withheld without reason.'),
     }),
     stepWith({
@@ -56,6 +58,7 @@ export function testingToOperation(testNoticeDays: number): Step[] {
       party: 'applicant',
       start: { mode: 'all', of: [{ step: 'authorization' }] },
       outcomes: [{ key: 'operating', title: 'In operation' }],
+      typical: { shortest: 1, likely: 7, longest: 21 },
       source: sgia.memory('SG-77', '2.2'),
     }),
   ]
@@ -88,6 +91,7 @@ function witnessTest(noticeDays: number): Step[] {
         say: 'The test moves by the days lost.',
         first: 'Give the notice now and name the new day.',
       },
+      typical: { shortest: 80, likely: 200, longest: 400 },
       source: sgip.memory('SG-75', '4.4; SGIA 2.1.1', 'high', 'The test is on a business day.'),
     }),
     stepWith({
@@ -110,6 +114,7 @@ function witnessTest(noticeDays: number): Step[] {
         first: 'Agree on a new day.',
       },
       evidence: 'Test report',
+      typical: { shortest: 7, likely: 14, longest: 30 },
       source: sgia.memory(
         'SG-76',
         '2.1.1, 2.1.2',
