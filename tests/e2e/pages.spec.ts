@@ -145,8 +145,10 @@ for (const who of walkers) {
       await test.step(address, async () => {
         await page.setViewportSize(wide)
         await visit(page, address)
-        await look(page, wide, 'light')
-        await look(page, phone, 'dark', who === 'developer' ? 'all' : 'size')
+        // The markup is the same for every role but for its presses: axe reads it once.
+        const depth = who === 'developer' || address === routes.people() ? 'all' : 'size'
+        await look(page, wide, 'light', depth)
+        await look(page, phone, 'dark', depth)
       })
     }
   })
