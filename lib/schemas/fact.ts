@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { channels, factKinds } from '@/lib/domain/clocks/facts'
+import { assigningStudies, channels, factKinds } from '@/lib/domain/clocks/facts'
 import { civilDateSchema, instantSchema, shortText, uuid } from '@/lib/schemas/common'
 
 export const termsSchema = z.object({
@@ -25,6 +25,9 @@ export const termsSchema = z.object({
   serviceType: shortText('The service type', 60).optional(),
   onMainline: z.boolean().optional(),
   codOn: civilDateSchema.optional(),
+  assignedCostMinor: z.number().int().nonnegative().max(1e13).optional(),
+  assignedBy: z.enum(assigningStudies).optional(),
+  allocatedStudyCostMinor: z.number().int().nonnegative().max(1e13).optional(),
 })
 
 export const evidenceInput = z.object({

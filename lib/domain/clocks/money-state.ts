@@ -1,4 +1,8 @@
-import { assignedCostOn, assignedCosts } from '@/lib/domain/clocks/assigned-costs'
+import {
+  assignedCostOn,
+  assignedCosts,
+  type AssignedCost,
+} from '@/lib/domain/clocks/assigned-costs'
 import type { CivilDate } from '@/lib/domain/clocks/civil-date'
 import type { DerivationLine } from '@/lib/domain/clocks/derivation'
 import { termsOf, type Fact } from '@/lib/domain/clocks/facts'
@@ -82,13 +86,30 @@ function heldOf(facts: readonly Fact[]): number {
 /** Terms and assigned cost as they were by the due date of the round. */
 function groundOf(graph: Graph, node: Node, target: MoneyRule): MoneyGround {
   if (target.kind === 'fixed') return { terms: {}, assignedCostMinor: null }
-  const changed = graph.index.facts.filter((fact) => fact.kind === 'changed')
+  const { changed, costs } = changesOf(graph.index.facts)
   const known = changed.filter((fact) => !node.dueOn || (eventDate(fact) ?? '') <= node.dueOn)
-  const cost = assignedCostOn(assignedCosts(changed), node.dueOn)
+  const cost = assignedCostOn(costs, node.dueOn)
   return {
     terms: known.length === changed.length ? graph.terms : termsOf(known),
     assignedCostMinor: cost?.amountMinor ?? null,
   }
+}
+
+interface Changes {
+  changed: Fact[]
+  costs: AssignedCost[]
+}
+
+// Every money obligation of a schedule asks for the same ones.
+const changesByFacts = new WeakMap<readonly Fact[], Changes>()
+
+function changesOf(facts: readonly Fact[]): Changes {
+  const found = changesByFacts.get(facts)
+  if (found) return found
+  const changed = facts.filter((fact) => fact.kind === 'changed')
+  const made = { changed, costs: assignedCosts(changed) }
+  changesByFacts.set(facts, made)
+  return made
 }
 
 /** Postings on the same account to the steps and rounds before this one. */
