@@ -1,25 +1,11 @@
 import { randomUUID } from 'node:crypto'
 import type { Page } from '@playwright/test'
-import { bodyOf, ownName, readApplication, send, startApplication } from './applications'
+import { ownName, send } from './applications'
+import { demoDesign as design, designedApplication } from './designed'
 import { expect, test } from './fixtures'
-import { demoDesigns, demoWeather } from '@/db/demo/designs'
 import { figuresOf } from '@/lib/domain/plant/design'
 import { api, routes } from '@/lib/routes'
-import type { Weather } from '@/lib/schemas/weather'
 import { synthetic, tmy3Lines } from '@/tests/unit/plant/weather-texts'
-
-const design = demoDesigns[0]!.revisions.at(-1)!.body
-
-/** An application of its own with a design on a synthetic year; gives its id. */
-async function designedApplication(developer: Page, engineer: Page, name: string): Promise<string> {
-  const id = await startApplication(developer, name)
-  const { project } = await readApplication(engineer, id)
-  const kept = await send(engineer, api.syntheticWeather(), demoWeather.mountain)
-  const weather = await bodyOf<Weather>(kept)
-  const revision = { id: randomUUID(), baseNo: 0, body: design, weatherId: weather.id }
-  await bodyOf(await send(engineer, api.projectDesign(project.id), revision))
-  return id
-}
 
 interface Watch {
   /** Run number and array over export limit, each time figures were shown. */
