@@ -137,7 +137,7 @@ function countedDue(
       unit: clock.unit,
       direction: clock.direction,
       roll: clock.roll,
-      receipt: clock.fromDayItself ? 'as_is' : rules.receiptRule,
+      receipt: from.received && !clock.fromDayItself ? rules.receiptRule : 'as_is',
       includeStart: clock.includeStart,
       stopped: stoppedDay(stops),
     },

@@ -11,7 +11,7 @@ import {
   type Step,
   type StepRef,
 } from '@/lib/domain/clocks/procedure'
-import { datedEvent } from '@/lib/domain/clocks/receipt'
+import { datedEvent, receivedByUtility } from '@/lib/domain/clocks/receipt'
 import { sayDate } from '@/lib/domain/clocks/say'
 import type { OrganizationRules, Parties, ScheduledItem } from '@/lib/domain/clocks/schedule-types'
 
@@ -30,6 +30,8 @@ export type Resolved =
   | {
       state: 'met'
       on: CivilDate
+      /** Something of ours that the utility received: its receipt rule moves day 0. */
+      received: boolean
       afterHours: boolean
       provisional: boolean
       lines: DerivationLine[]
@@ -175,6 +177,7 @@ function dueDate(node: Node): Resolved {
   return {
     state: 'met',
     on: node.dueOn,
+    received: false,
     afterHours: false,
     provisional: node.provisional,
     lines: [startLine(node, node.dueOn, 'due')],
@@ -192,6 +195,7 @@ function eventOf(graph: Graph, ref: StepRef, target: Step, node: Node): Resolved
   return {
     state: 'met',
     on,
+    received: event !== null && event !== undefined && receivedByUtility(target),
     afterHours: event?.afterHours ?? false,
     provisional: node.provisional || node.presumed,
     lines: [startLine(node, on, basis), ...(event?.lines ?? [])],
@@ -209,6 +213,7 @@ function bookedDate(graph: Graph, target: Step, instance: number, from: Step): R
   if (happened && from.key !== target.key)
     return {
       ...happened,
+      received: false,
       state: 'met',
       provisional: false,
       lines: [
@@ -226,6 +231,7 @@ function bookedDate(graph: Graph, target: Step, instance: number, from: Step): R
   return {
     state: 'met',
     on,
+    received: false,
     afterHours: false,
     provisional: !happened,
     lines: [{ kind: 'start', on, text }],

@@ -125,7 +125,7 @@ describe('Juniper Flat, a pro forma utility that does not roll', () => {
       ['final_report', '2027-04-30'],
       ['lgia_draft', '2027-05-09'],
       // Counted from receipt: by this utility's rule a Sunday is received on Monday.
-      ['appendices', '2027-06-09'],
+      ['appendices', '2027-06-08'],
       ['negotiation', '2027-06-29'],
       ['gate_3', '2027-07-08'],
     ])
