@@ -175,6 +175,7 @@ test('An address that leads nowhere says so inside the house and keeps its way o
   for (const address of ['/no-such-page', gone]) {
     const answer = await page.goto(address)
     expect(answer?.status()).toBe(404)
+    await expect(page).toHaveTitle(/Lineside$/)
     await expect(page.getByRole('main').getByRole('link').first()).toBeVisible()
     await look(page, phone, 'light')
   }

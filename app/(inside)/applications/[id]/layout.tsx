@@ -14,7 +14,12 @@ interface LayoutProps {
 }
 
 export async function generateMetadata({ params }: LayoutProps): Promise<Metadata> {
-  const { view } = await readPageApplication((await params).id)
+  // Where there is none, the page says so; the title must not fail with it.
+  const view = await readPageApplication((await params).id).then(
+    (read) => read.view,
+    () => null,
+  )
+  if (!view) return {}
   return { title: { default: view.project.name, template: `%s · ${view.project.name}` } }
 }
 
