@@ -4,7 +4,8 @@ import type { WidgetEntry } from '@/app/(inside)/calendar/_components/calendar-v
 import { Contact } from '@/app/(inside)/calendar/_components/contact'
 import { entryWords } from '@/components/calendar/entry-words'
 import { civilOfDate } from '@/lib/client/widget-date'
-import { formatShortDate } from '@/lib/domain/format-date'
+import type { CivilDate } from '@/lib/domain/clocks/civil-date'
+import { formatDate } from '@/lib/domain/format-date'
 import { routes } from '@/lib/routes'
 
 /** A line of the agenda: what, for which request, and how it stands. */
@@ -26,6 +27,7 @@ export function AgendaEntry({ event: { event } }: EventProps<WidgetEntry>) {
   )
 }
 
-export function AgendaDate({ day }: { day: Date }) {
-  return <span className="mono">{formatShortDate(civilOfDate(day))}</span>
+/** The day of an agenda line; the year only where it is not this one. */
+export function AgendaDate({ day, todayOn }: { day: Date; todayOn: CivilDate }) {
+  return <span className="mono">{formatDate(civilOfDate(day), todayOn)}</span>
 }

@@ -77,9 +77,12 @@ export function CalendarView({ on, view, filter, answer }: CalendarViewProps) {
         ),
       },
       eventWrapper: MonthCell,
-      agenda: { event: AgendaEntry, date: AgendaDate },
+      agenda: {
+        event: AgendaEntry,
+        date: ({ day }: { day: Date }) => <AgendaDate day={day} todayOn={answer.todayOn} />,
+      },
     }),
-    [closed, on],
+    [closed, on, answer.todayOn],
   )
   return (
     <>

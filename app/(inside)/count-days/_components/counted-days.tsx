@@ -10,15 +10,22 @@ export function CountedDays({ days }: Props) {
     <table className="mt-5 w-full max-w-xl">
       <thead>
         <tr>
-          <th scope="col">Day</th>
-          <th scope="col">Counts</th>
+          <th scope="col" className="cap border-ink border-b-[1.5px] py-2 text-left">
+            Day
+          </th>
+          <th scope="col" className="cap border-ink border-b-[1.5px] py-2 text-left">
+            Counts
+          </th>
         </tr>
       </thead>
       <tbody>
         {days.map((day, index) => (
-          <tr key={`${day.on}-${index}`} className={day.counted ? undefined : 'text-ink-2'}>
-            <td className="mono py-1">{formatDate(day.on)}</td>
-            <td className="py-1">{day.counted ? day.reason : `no: ${day.reason}`}</td>
+          <tr
+            key={`${day.on}-${index}`}
+            className={day.counted ? 'border-rule border-b' : 'border-rule text-ink-2 border-b'}
+          >
+            <td className="mono w-44 py-1.5">{formatDate(day.on)}</td>
+            <td className="py-1.5">{day.counted ? day.reason : `no: ${day.reason}`}</td>
           </tr>
         ))}
       </tbody>
