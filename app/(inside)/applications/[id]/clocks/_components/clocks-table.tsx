@@ -1,3 +1,4 @@
+import { otherDateWords } from '@/components/pipeline/clock-text'
 import { clsx } from 'clsx'
 import Link from 'next/link'
 import { ClockDetail } from '@/app/(inside)/applications/[id]/clocks/_components/clock-detail'
@@ -190,7 +191,9 @@ function ClockRow(props: { item: ItemView; table: ClocksTableProps; isOpen: bool
 
 function dueText(item: ItemView, todayOn: string): string | null {
   const due = dueWords(item, todayOn)
-  return due && item.provisional ? `${due}, provisional` : due
+  if (!due) return null
+  const other = item.status === 'open' ? otherDateWords(item, todayOn) : null
+  return [due, item.provisional && 'provisional', other].filter(Boolean).join(', ')
 }
 
 function DoneCell({ item, view }: { item: ItemView; view: ApplicationView }) {
