@@ -6,6 +6,7 @@ import {
   fromDayNumber,
   type CivilDate,
 } from '@/lib/domain/clocks/civil-date'
+import { workingDue } from '@/lib/domain/clocks/working-due'
 import { localOf } from '@/lib/domain/clocks/zoned'
 import type {
   CalendarAnswer,
@@ -111,10 +112,7 @@ export async function allEvents(
         organizationId: own.operator.id,
       })
       if (item.obligation !== '') return item.startBy ? [make('start_by', item.startBy)] : []
-      const dueOn =
-        item.statedDueOn && (!item.dueOn || item.statedDueOn < item.dueOn)
-          ? item.statedDueOn
-          : item.dueOn!
+      const dueOn = workingDue(item)!
       const missed = item.standing.state === 'missed' && dueOn < todayOn
       return missed ? [make('due', dueOn), make('open', todayOn)] : [make('due', dueOn)]
     })

@@ -2,6 +2,7 @@ import type { BusinessCalendar } from '@/lib/domain/clocks/calendar'
 import { dayNumber, daysBetween, type CivilDate } from '@/lib/domain/clocks/civil-date'
 import type { StepParty } from '@/lib/domain/clocks/procedure'
 import type { Status } from '@/lib/domain/clocks/schedule-types'
+import { workingDue } from '@/lib/domain/clocks/working-due'
 import { localOf } from '@/lib/domain/clocks/zoned'
 
 export type Tone = 'missed' | 'soon' | 'far' | 'theirs' | 'done' | 'none'
@@ -53,7 +54,7 @@ export function standing(item: Standable, nowAt: string, calendar: BusinessCalen
   if (settled) return settled
   const today = localOf(nowAt, item.zone).on
   const theirs = item.party !== 'applicant' && item.party !== 'both'
-  const dueOn = earliest(item.dueOn, item.statedDueOn)
+  const dueOn = workingDue(item)
   if (item.startOn && item.startOn > today && !dueOn) return plain('not_begun', 'none', 'not begun')
   if (!dueOn || !item.dueAt) return plain('undated', theirs ? 'theirs' : 'none', 'no date')
   const businessDays = businessDaysTo(calendar, today, dueOn)
@@ -122,11 +123,6 @@ function settledStanding(item: Standable): Standing | null {
 
 function plain(state: Standing['state'], tone: Tone, left: string): Standing {
   return { state, tone, left, businessDays: null, closesInMinutes: null }
-}
-
-function earliest(a: CivilDate | null, b: CivilDate | null): CivilDate | null {
-  if (!a || !b) return a ?? b
-  return a < b ? a : b
 }
 
 function ago(dueOn: CivilDate, today: CivilDate, businessDays: number): string {
