@@ -41,6 +41,7 @@ export function stateWords(item: Pick<ItemView, 'standing' | 'outcome'>): StateW
   const words: Record<ItemView['standing']['state'], StateWords> = {
     missed: { tone: 'missed', text: 'missed' },
     theirs_late: { tone: 'theirs', text: 'they are late' },
+    presumed: { tone: 'theirs', text: 'presumed, to be confirmed' },
     running: { tone: item.standing.tone === 'soon' ? 'soon' : 'plain', text: 'running' },
     theirs_running: { tone: 'theirs', text: 'with them' },
     undated: { tone: 'plain', text: 'open, no date' },

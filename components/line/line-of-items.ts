@@ -118,6 +118,7 @@ function dateLabel(item: LineSource, state: LineState, on: string, todayOn: stri
   if (item.status === 'stopped') return `${date}, stopped`
   const over = -(item.standing.businessDays ?? 0)
   if (item.standing.state === 'theirs_late') return `due ${date}, ${over} BD over`
+  if (item.standing.state === 'presumed') return `${date}, presumed`
   if (state === 'missed') return `due ${date}, missed`
   return item.provisional ? `${date}, provisional` : `due ${date}`
 }

@@ -10,6 +10,7 @@ export const standingSchema = z.object({
   state: z.enum([
     'missed',
     'theirs_late',
+    'presumed',
     'running',
     'theirs_running',
     'undated',

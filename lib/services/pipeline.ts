@@ -129,7 +129,9 @@ export function nextClock(items: readonly ItemView[]): ItemView | null {
   const dated = open.filter((item) => item.dueAt !== null)
   const byDue = [...dated].sort((a, b) => (a.dueAt! < b.dueAt! ? -1 : 1))
   const ours = (item: ItemView) => item.party === 'applicant' || item.party === 'both'
-  return byDue.find(ours) ?? byDue[0] ?? open.find(ours) ?? open[0] ?? null
+  // What is presumed waits for nobody: the clock that runs behind it comes first.
+  const runs = byDue.find((item) => item.standing.state !== 'presumed')
+  return byDue.find(ours) ?? runs ?? byDue[0] ?? open.find(ours) ?? open[0] ?? null
 }
 
 function begun(item: ItemView): boolean {

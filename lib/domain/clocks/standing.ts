@@ -11,6 +11,8 @@ export interface Standing {
   state:
     | 'missed'
     | 'theirs_late'
+    /** Its clock ran out and the rule presumes an outcome until a person confirms it. */
+    | 'presumed'
     | 'running'
     | 'theirs_running'
     | 'undated'
@@ -40,6 +42,7 @@ export interface Standable {
   dueAt: string | null
   doneLate: boolean | null
   zone: string
+  consequence?: { effect: string }
 }
 
 /** Within this many business days a clock counts as near. */
@@ -59,6 +62,14 @@ export function standing(item: Standable, nowAt: string, calendar: BusinessCalen
   if (!dueOn || !item.dueAt) return plain('undated', theirs ? 'theirs' : 'none', 'no date')
   const businessDays = businessDaysTo(calendar, today, dueOn)
   const past = Date.parse(nowAt) > Date.parse(item.dueAt)
+  if (past && item.consequence?.effect === 'presumed')
+    return {
+      state: 'presumed',
+      tone: 'theirs',
+      left: 'presumed',
+      businessDays,
+      closesInMinutes: null,
+    }
   if (past)
     return {
       state: theirs ? 'theirs_late' : 'missed',

@@ -152,3 +152,16 @@ describe('the fast track', () => {
     expect(item(facts, 'initial_review').status).toBe('open')
   })
 })
+
+describe('a step whose outcome is presumed', () => {
+  it('stands as presumed once its clock ran out, and is nobody’s lateness', () => {
+    const facts = [
+      fact({ step: 'file', outcome: 'filed', receivedOn: '2026-09-28' }),
+      fact({ step: 'completeness', outcome: 'deficient', receivedOn: '2026-10-09' }),
+      fact({ step: 'cure', outcome: 'supplied', receivedOn: '2026-10-23' }),
+    ]
+    const second = item(facts, 'completeness', 2)
+    expect(standing(second, '2026-10-26T18:00:00Z', federalCalendar).state).toBe('presumed')
+    expect(standing(second, '2026-10-23T18:00:00Z', federalCalendar).state).toBe('theirs_running')
+  })
+})
