@@ -69,7 +69,7 @@ const jobTable = {
   sweepNotices: ['notice.send', 'obligation.read', 'notice.read', 'person.read'],
   recomputeApplication: ['job.run', 'application.read'],
   renderExhibit: ['job.run', 'exhibit.read', 'application.read', 'calculation.read', 'design.read'],
-  readWeather: ['job.run', 'weather.read', 'file.read'],
+  compareProjections: ['job.run', 'application.read'],
   demo: [...actions],
 } satisfies Record<string, readonly Action[]>
 

@@ -13,8 +13,8 @@ export const jobs = {
   recomputeApplication: z.strictObject({ applicationId: id }),
   /** Makes the document of one exhibit revision. */
   renderExhibit: z.strictObject({ exhibitRevisionId: id }),
-  /** Reads an uploaded weather file; `sha256` is its address in the file store. */
-  readWeather: z.strictObject({ sha256: z.string().regex(/^[0-9a-f]{64}$/) }),
+  /** Compares every kept projection with what the facts say. */
+  compareProjections: nothing,
 } as const
 
 export type JobName = keyof typeof jobs
@@ -26,5 +26,5 @@ export const jobProcess: Record<JobName, 'send' | 'make'> = {
   sweepNotices: 'send',
   recomputeApplication: 'make',
   renderExhibit: 'make',
-  readWeather: 'make',
+  compareProjections: 'make',
 }

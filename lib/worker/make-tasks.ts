@@ -1,6 +1,7 @@
 import type { TaskList } from 'graphile-worker'
 import { jobs } from '@/lib/queue/jobs'
 import { recomputeApplication } from '@/lib/services/facts'
+import { compareProjections } from '@/lib/services/projection-check'
 import { jobContext } from '@/lib/worker/context'
 import { renderExhibit } from '@/lib/worker/render-exhibit'
 
@@ -10,6 +11,10 @@ import { renderExhibit } from '@/lib/worker/render-exhibit'
  */
 export const makeTasks: TaskList = {
   renderExhibit,
+  async compareProjections(payload) {
+    jobs.compareProjections.parse(payload)
+    await compareProjections(jobContext('compareProjections'))
+  },
   async recomputeApplication(payload) {
     const { applicationId } = jobs.recomputeApplication.parse(payload)
     await recomputeApplication(jobContext('recomputeApplication'), applicationId)

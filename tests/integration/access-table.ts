@@ -172,6 +172,7 @@ export const services: Record<string, Action | ServiceRule> = {
   'people.invitePerson': 'person.write',
   'people.listPeople': 'person.read',
   'people.resendInvitation': 'person.write',
+  'projection-check.compareProjections': 'job.run',
   'pipeline.listApplications': 'application.read',
   'plant.checkStrings': 'plant.estimate',
   'plant.estimatePlant': 'plant.estimate',
