@@ -1,3 +1,4 @@
+import { workingDue } from '@/lib/domain/clocks/working-due'
 import { formatShortDate } from '@/lib/domain/format-date'
 import type { LineClock, LineModel, LineParty, LineState, LineStep } from '@/components/line/model'
 
@@ -106,9 +107,7 @@ function lineDateOf(item: LineSource): string | null {
 
 /** People work to the earlier of our count and the date the utility states. */
 export function workingDueOf(item: Pick<LineSource, 'dueOn' | 'statedDueOn'>): string | null {
-  const { dueOn, statedDueOn } = item
-  if (!dueOn || !statedDueOn) return dueOn ?? statedDueOn ?? null
-  return dueOn < statedDueOn ? dueOn : statedDueOn
+  return workingDue({ dueOn: item.dueOn, statedDueOn: item.statedDueOn ?? null })
 }
 
 function dateLabel(item: LineSource, state: LineState, on: string, todayOn: string): string {

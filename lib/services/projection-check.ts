@@ -6,6 +6,7 @@ import { localOf } from '@/lib/domain/clocks/zoned'
 import { routes } from '@/lib/routes'
 import { recordAudit } from '@/lib/services/audit'
 import { authorize, type Context } from '@/lib/services/context'
+import { hashOfInput } from '@/lib/services/input-hash'
 import { log } from '@/lib/services/log'
 import { queueNotices, siteUrl } from '@/lib/services/notices'
 import { computeSchedule, obligationRows } from '@/lib/services/projection'
@@ -52,8 +53,8 @@ async function differingKeys(tx: Tx, applicationId: string): Promise<string[]> {
     )
   const { schedule } = await computeSchedule(tx, applicationId)
   const fresh = obligationRows(applicationId, application!.lastSeq, schedule.items)
-  const kept = new Map(stored.map(({ id: _id, ...row }) => [keyOf(row), textOf(row)]))
-  const computed = new Map(fresh.map((row) => [keyOf(row), textOf(row)]))
+  const kept = new Map(stored.map(({ id: _id, ...row }) => [keyOf(row), contentOf(row)]))
+  const computed = new Map(fresh.map((row) => [keyOf(row), contentOf(row)]))
   return [...new Set([...kept.keys(), ...computed.keys()])].filter(
     (key) => kept.get(key) !== computed.get(key),
   )
@@ -63,16 +64,9 @@ function keyOf(row: { step: string; instance: number; obligation?: string }): st
   return `${row.step}, round ${row.instance}${row.obligation ? `, ${row.obligation}` : ''}`
 }
 
-/** Every column in a fixed order; the database gives JSON keys back in an order of its own. */
-function textOf(row: object): string {
-  return JSON.stringify(sorted(row))
-}
-
-function sorted(value: unknown): unknown {
-  if (value === null || typeof value !== 'object' || value instanceof Date) return value
-  if (Array.isArray(value)) return value.map(sorted)
-  const entries = Object.entries(value).filter(([, held]) => held !== undefined)
-  return entries.sort(([a], [b]) => (a < b ? -1 : 1)).map(([key, held]) => [key, sorted(held)])
+/** Every column, whatever the order in which the database gives JSON keys back. */
+function contentOf(row: { dueAt?: Date | null }): string {
+  return hashOfInput({ ...row, dueAt: row.dueAt?.toISOString() ?? null })
 }
 
 async function reportDifferences(ctx: Context, report: ProjectionReport): Promise<void> {
