@@ -43,7 +43,7 @@ function LoadedForm(props: FactFormProps & { view: ApplicationView }) {
     return () => cancelAnimationFrame(frame)
   }, [])
   return (
-    <form ref={element} onSubmit={call.onSubmit}>
+    <form ref={element} noValidate onSubmit={call.onSubmit}>
       <ErrorSummary errors={call.fields} />
       <FactRefusal
         problem={call.problem}
